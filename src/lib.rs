@@ -1,0 +1,3 @@
+//! What light a flight meets: daylight, twilight and darkness along a long-haul or polar route.
+
+pub mod units;

@@ -1,0 +1,15 @@
+//! The quantities that cross the rooms' faces: angles, places, lengths and instants.
+//!
+//! Knows nothing of flights or of the sky.
+
+mod angle;
+mod place;
+mod metres;
+mod instant;
+mod vector;
+
+pub use angle::Angle;
+pub use instant::Instant;
+pub use metres::Metres;
+pub use place::{Latitude, Longitude, Place, PlaceError};
+pub use vector::{Vector, dot};

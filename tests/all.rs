@@ -1,0 +1,1 @@
+//! The table of contents of everything that is checked against the outside.
