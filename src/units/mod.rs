@@ -3,12 +3,14 @@
 //! Knows nothing of flights or of the sky.
 
 mod angle;
+mod ellipsoid;
 mod place;
 mod metres;
 mod instant;
 mod vector;
 
 pub use angle::Angle;
+pub use ellipsoid::wgs84;
 pub use instant::Instant;
 pub use metres::Metres;
 pub use place::{Latitude, Longitude, Place, PlaceError};

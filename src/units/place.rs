@@ -11,6 +11,12 @@ pub enum PlaceError {
     /// Not a finite longitude within a turn.
     #[error("longitude {0}° is outside −180° to 360°")]
     Longitude(f64),
+    /// Not a northern latitude.
+    #[error("the North Polar Area's limit of {0}° is outside 0° to 90°")]
+    NorthernLimit(f64),
+    /// Not a southern latitude.
+    #[error("the South Polar Area's limit of {0}° is outside −90° to 0°")]
+    SouthernLimit(f64),
 }
 
 /// A geodetic latitude, positive north, −90° to 90°.

@@ -1,0 +1,82 @@
+//! Crossings of one limit, and the places where the Sun only touches it.
+
+use super::limit::{Direction, Limit};
+use super::trace::{Peak, Trace};
+use crate::units::Angle;
+
+/// How near to a limit a turning Sun is said to touch it: what its elevation may err by, as a sum of causes.
+pub const TOUCH: Angle = Angle::from_arcsec(SUN_PLACE_ARCSEC + POLAR_MOTION_ARCSEC + CURVE_ARCSEC);
+/// The Sun's apparent place and its table against JPL DE421.
+const SUN_PLACE_ARCSEC: f64 = 0.03;
+/// Polar motion, which is left out (IERS Conventions 2010, section 5.1: within 0.3″ in the years served).
+const POLAR_MOTION_ARCSEC: f64 = 0.3;
+/// The curve in place of the elevation, far more than it needs.
+const CURVE_ARCSEC: f64 = 0.01;
+
+/// The Sun meets a limit.
+#[derive(Debug, Clone, Copy)]
+pub struct Crossing {
+    /// Seconds from take-off.
+    pub at_s: f64,
+    /// Which limit.
+    pub limit: Limit,
+    /// Upwards or downwards.
+    pub direction: Direction,
+}
+
+/// The Sun turns so near to a limit that the model cannot tell whether it crosses.
+#[derive(Debug, Clone, Copy)]
+pub struct Touch {
+    /// Seconds from take-off.
+    pub at_s: f64,
+    /// Which limit.
+    pub limit: Limit,
+    /// Elevation less the limit, where the Sun turns.
+    pub margin: Angle,
+}
+
+/// On which side of a limit a peak lies, as far as can be told.
+#[derive(Clone, Copy, PartialEq, Eq)]
+enum Side {
+    Above,
+    Below,
+    Undecided,
+}
+
+/// Finds a limit's crossings and touches; appends both.
+pub(super) fn meetings(trace: &Trace, limit: Limit, crossings: &mut Vec<Crossing>, touches: &mut Vec<Touch>) {
+    let level = limit.elevation().rad().sin();
+    let peaks = trace.peaks();
+    let last = peaks.len() - 1;
+    let strict = |i: usize| if peaks[i].sine >= level { Side::Above } else { Side::Below };
+    let margin = TOUCH.rad() * limit.elevation().rad().cos();
+    let side = |i: usize| match (peaks[i].sine - level).abs() < margin && i > 0 && i < last {
+        true => Side::Undecided,
+        false => strict(i),
+    };
+    let mut from = 0;
+    for to in 1..=last {
+        if side(to) == Side::Undecided {
+            continue;
+        }
+        if side(from) == side(to) {
+            // a run of undecided peaks between two on one side: the one nearest to the far side is the touch
+            touches.extend(touch(&peaks[from..=to], limit, level));
+        } else {
+            let before = (from..to).find(|&i| strict(i) != strict(i + 1)).unwrap_or(from);
+            let direction = if side(to) == Side::Above { Direction::Rising } else { Direction::Setting };
+            crossings.push(Crossing { at_s: trace.meets(level, before), limit, direction });
+        }
+        from = to;
+    }
+}
+
+/// The touch within a run of peaks whose ends lie on one side, if there are peaks between them.
+fn touch(run: &[Peak], limit: Limit, level: f64) -> Option<Touch> {
+    let inner = run.get(1..run.len() - 1)?;
+    let from_above = run[0].sine >= level;
+    let deepest = |a: &&Peak, b: &&Peak| if from_above { a.sine.total_cmp(&b.sine) } else { b.sine.total_cmp(&a.sine) };
+    let peak = inner.iter().min_by(deepest)?;
+    let margin = Angle::from_rad((peak.sine - level) / limit.elevation().rad().cos());
+    Some(Touch { at_s: peak.at_s, limit, margin })
+}

@@ -1,0 +1,21 @@
+//! The Sun at an instant and as seen from a place. It has never heard of aeroplanes.
+//!
+//! Everything here is geometric (airless) unless a name says otherwise.
+
+mod time;
+mod model;
+mod table;
+mod sun;
+mod observer;
+mod almanac;
+mod year;
+
+pub use almanac::Almanac;
+pub use observer::{GeometricElevation, azimuth, elevation, sine_of_elevation};
+pub use sun::SunPlace;
+pub use table::{Sky, SkyError, SunWindow};
+pub use time::{DUT1_BOUND_S, YEARS, answers_for, dut1_s};
+pub use year::{YearEvent, YearMoment, year_moments};
+
+/// The rate at which the mean Sun turns about the Earth's axis, in rad/s.
+pub const MEAN_SUN_RAD_S: f64 = std::f64::consts::TAU / 86_400.0;

@@ -1,0 +1,67 @@
+//! The Sun against an observer's horizontal plane, topocentric on the WGS84 ellipsoid at height zero.
+
+use super::sun::{AU_M, SunPlace};
+use crate::units::{Angle, Place, Vector, dot, wgs84};
+
+/// The geometric (airless) elevation of a body's centre above the horizontal plane.
+#[derive(Debug, Clone, Copy, PartialEq, PartialOrd)]
+pub struct GeometricElevation(pub Angle);
+
+/// The sine of the Sun's geometric elevation at the foot of an ellipsoid normal.
+///
+/// # Shapes and units
+/// `normal` is the outward unit normal, Earth-fixed. The observer stands on the ellipsoid; the parallax (up to 8.9″) is
+/// exact and not a series.
+///
+/// # Source
+/// The place under a normal is N (n_x, n_y, (1 − e²) n_z) with N = a / √(1 − e² n_z²) (any text on geodesy, e.g.
+/// EPSG Guidance Note 7-2, section 4.1.1).
+#[inline]
+pub fn sine_of_elevation(normal: Vector, sun: &SunPlace) -> f64 {
+    let n_z2 = normal[2] * normal[2];
+    let w = (1.0 - wgs84::E2 * n_z2).sqrt();
+    let radius_au = wgs84::A_M / AU_M / w;
+    let [x, y, z] = normal;
+    let place = [radius_au * x, radius_au * y, radius_au * (1.0 - wgs84::E2) * z];
+    let d = sun.distance_au;
+    let towards_sun = dot(place, sun.direction);
+    let range = (d * (d - 2.0 * towards_sun) + dot(place, place)).sqrt();
+    // n·P is N (1 − e² n_z²), the distance of the tangent plane from the centre
+    (d * dot(normal, sun.direction) - radius_au * w * w) / range
+}
+
+/// The Sun's geometric elevation at a place.
+pub fn elevation(place: Place, sun: &SunPlace) -> GeometricElevation {
+    let sine = sine_of_elevation(place.normal(), sun);
+    let [east, north, _] = horizontal(place, sun);
+    // near the zenith the sine is flat, so the horizontal part decides
+    GeometricElevation(Angle::from_rad(sine.atan2(east.hypot(north))))
+}
+
+/// The Sun's azimuth at a place, from true north through east, 0° to 360°.
+///
+/// At a pole north is the meridian of the longitude that the place was given with.
+pub fn azimuth(place: Place, sun: &SunPlace) -> Angle {
+    let [east, north, _] = horizontal(place, sun);
+    Angle::from_rad(east.atan2(north)).turned_positive()
+}
+
+/// The topocentric unit direction's east, north and upward parts.
+fn horizontal(place: Place, sun: &SunPlace) -> Vector {
+    let (sin_lat, cos_lat) = place.lat.angle().rad().sin_cos();
+    let (sin_lon, cos_lon) = place.lon.angle().rad().sin_cos();
+    let radius_au = wgs84::A_M / AU_M / (1.0 - wgs84::E2 * sin_lat * sin_lat).sqrt();
+    let under = [
+        radius_au * cos_lat * cos_lon,
+        radius_au * cos_lat * sin_lon,
+        radius_au * (1.0 - wgs84::E2) * sin_lat,
+    ];
+    let line: Vector = std::array::from_fn(|i| sun.distance_au * sun.direction[i] - under[i]);
+    let range = dot(line, line).sqrt();
+    let axes = [
+        [-sin_lon, cos_lon, 0.0],
+        [-sin_lat * cos_lon, -sin_lat * sin_lon, cos_lat],
+        [cos_lat * cos_lon, cos_lat * sin_lon, sin_lat],
+    ];
+    axes.map(|axis| dot(axis, line) / range)
+}
