@@ -2,6 +2,7 @@
 
 pub mod units;
 pub mod curve;
+pub mod places;
 pub mod intake;
 pub mod path;
 pub mod sky;
