@@ -3,6 +3,7 @@
 It does not know of flights or files other than the ephemeris, reads no clock and needs no network.
 """
 
+import warnings
 from datetime import datetime, timedelta, timezone
 from importlib.metadata import version
 from pathlib import Path
@@ -13,6 +14,9 @@ from scipy.interpolate import make_interp_spline
 from skyfield.api import load, load_file, wgs84
 from skyfield.framelib import ecliptic_frame, itrs
 from skyfield.timelib import Timescale
+
+# the expiry that skyfield-data warns of is that of its Earth-rotation file, which nothing here reads
+warnings.filterwarnings("ignore", message="The file finals2000A.all has expired")
 
 MADE_ON = "2026-12-01"
 DAY_S = 86400.0
@@ -95,29 +99,32 @@ def _turned(vector, angle):
 
 
 class SunTrack:
-    """Earth-fixed apparent geocentric Sun over a span, splined in axes that turn with the mean Sun."""
+    """Earth-fixed geocentric Sun and its aberration over a span, splined in axes that turn with the mean Sun."""
 
     def __init__(self, start, span_s):
         self.midnight = midnight_of(start)
         first = (start - self.midnight) / timedelta(seconds=1) - MARGIN_S
         nodes = np.arange(first, first + span_s + 2 * MARGIN_S + NODE_S, NODE_S)
-        fixed = geocentric(times(self.midnight, nodes)).frame_xyz(itrs).au
-        slow = _turned(fixed, -2 * np.pi * nodes / DAY_S)
-        self.spline = make_interp_spline(nodes, slow.T, k=5)
+        t = times(self.midnight, nodes)
+        seen = geocentric(t).frame_xyz(itrs).au
+        unaberrated = EARTH.at(t).observe(SUN).frame_xyz(itrs).au
+        shift = seen / np.linalg.norm(seen, axis=0) - unaberrated / np.linalg.norm(unaberrated, axis=0)
+        slow = [_turned(vector, -2 * np.pi * nodes / DAY_S) for vector in (unaberrated, shift)]
+        self.splines = [make_interp_spline(nodes, vector.T, k=5) for vector in slow]
         self.start_s = first + MARGIN_S
 
-    def fixed_au(self, seconds):
-        """Earth-fixed vector in au at seconds after the start of the track."""
+    def fixed(self, seconds):
+        """Earth-fixed Sun in au, without aberration, and the shift by aberration of its direction."""
         day_s = np.asarray(seconds, dtype=float) + self.start_s
-        return _turned(self.spline(day_s).T, 2 * np.pi * day_s / DAY_S)
+        return [_turned(spline(day_s).T, 2 * np.pi * day_s / DAY_S) for spline in self.splines]
 
     def elevation_deg(self, seconds, lat_deg, lon_deg):
         """Airless topocentric elevation of the centre, with parallax and the aberration of the Earth's spin."""
         normal, place_m = normal_and_place(lat_deg, lon_deg)
-        ray = self.fixed_au(seconds) - place_m / AU_M
-        ray /= np.linalg.norm(ray, axis=0)
+        sun_au, shift = self.fixed(seconds)
+        ray = sun_au - place_m / AU_M
         spin = EARTH_SPIN_RAD_S / LIGHT_M_S
-        ray += spin * np.array([-place_m[1], place_m[0], np.zeros_like(place_m[2])])
+        ray = ray / np.linalg.norm(ray, axis=0) + shift + spin * np.array([-place_m[1], place_m[0], np.zeros_like(place_m[2])])
         up = np.sum(ray * normal, axis=0)
         across = np.linalg.norm(np.cross(ray, normal, axis=0), axis=0)
         return np.degrees(np.arctan2(up, across))
@@ -147,6 +154,7 @@ def write_table(path, certificate, header, rows):
     packages = ", ".join(f"{name} {version(name)}" for name in certificate.pop("packages"))
     lines = [f"# made by: {certificate.pop('script')} with {packages}", f"# made on: {MADE_ON}"]
     lines += [f"# {key}: {value}" for key, value in certificate.items()]
+    assert not any(mark in cell for row in rows for cell in row for mark in ',"'), "a cell may not need quoting"
     lines.append(",".join(header))
     lines += [",".join(row) for row in rows]
     path.write_text("\n".join(lines) + "\n", encoding="ascii")
