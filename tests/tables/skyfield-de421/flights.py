@@ -1,4 +1,4 @@
-"""Write flights.csv, flight_points.csv, crossings.csv and extremes.csv: what the Sun does beneath known flights.
+"""Write flights, flight_points, crossings, extremes and turns: what the Sun does beneath known flights.
 
 It does not know gloamline; it samples every second, which a real tool should not need, and it knows only a
 point at height 0 on WGS84 below the aircraft, with no refraction.
@@ -39,7 +39,8 @@ COLUMNS = {
         ["id", "seq", "utc", "limit", "direction", "lat_deg", "lon_deg", "rate_deg_per_h"],
         "id (of flights.csv); seq (from 1 in order of time); utc (ISO 8601); limit (horizon -50 arcmin, civil -6, nautical -12, "
         "astronomical -18 degrees of elevation of the Sun's centre); direction (rising or setting of the Sun beneath the aircraft); "
-        "lat_deg and lon_deg (degrees, point below the aircraft); rate_deg_per_h (degrees of elevation per hour there, to 4 decimals: an error of elevation divided by it is the error of the instant); a flight without lines here meets no limit",
+        "lat_deg and lon_deg (degrees, point below the aircraft); rate_deg_per_h (degrees of elevation per hour there, to 4 decimals: an "
+        "error of elevation divided by it is the error of the instant); a flight without lines here meets no limit",
     ),
     "extremes": (
         ["id", "kind", "utc", "elevation_deg"],
