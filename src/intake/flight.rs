@@ -1,6 +1,6 @@
 //! A flight as its planner holds it: two ends, two times, perhaps points between.
 
-use crate::units::{Instant, Metres, Place};
+use crate::units::{Dut1, Instant, Latitude, Metres, Place, PlaceError};
 use chrono_tz::Tz;
 
 /// A flight, valid in itself: times in order and within the years answered for.
@@ -20,6 +20,10 @@ pub struct Flight {
     pub level: Option<Metres>,
     /// The points between, in order.
     pub waypoints: Vec<RoutePoint>,
+    /// Where its operator's authority draws the polar areas, if not where 14 CFR 121.7 does.
+    pub polar_limits: Option<PolarLimits>,
+    /// UT1 − UTC on its date, if the planner knows it.
+    pub dut1: Option<Dut1>,
 }
 
 /// One end of a flight.
@@ -44,4 +48,34 @@ pub struct RoutePoint {
     pub place: Place,
     /// When it is passed, if the planner says so.
     pub time: Option<Instant>,
+}
+
+/// Where the polar areas begin.
+///
+/// # Source
+/// The default is 14 CFR 121.7 (72 FR 1878, 16 January 2007): the North Polar Area is all north of 78°00′N, the South
+/// Polar Area all south of 60°00′S. Other states draw them elsewhere (one at 67°S: AC-OPS 27, 2010), so both are data.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct PolarLimits {
+    /// The northern area's limit.
+    pub north: Latitude,
+    /// The southern area's limit.
+    pub south: Latitude,
+}
+
+impl PolarLimits {
+    /// Limits in degrees of latitude, each counted from the equator towards its own pole.
+    ///
+    /// # Errors
+    /// Outside 0° to 90°.
+    pub fn from_deg(north: f64, south: f64) -> Result<Self, PlaceError> {
+        let limit = |deg: f64| if (0.0..=90.0).contains(&deg) { Ok(deg) } else { Err(PlaceError::PolarLimit(deg)) };
+        Ok(Self { north: Latitude::from_deg(limit(north)?)?, south: Latitude::from_deg(-limit(south)?)? })
+    }
+}
+
+impl Default for PolarLimits {
+    fn default() -> Self {
+        Self { north: Latitude::NORTH_78, south: Latitude::SOUTH_60 }
+    }
 }

@@ -1,7 +1,18 @@
 //! Flight files and coordinate notations, turned into a [`Flight`].
 //!
-//! Is given text and the name of its source; never opens a file.
+//! Is given text and the name of its source; never opens a file. What needs a geodesic (speeds, a flight of no length)
+//! is checked where the geodesics are, in `path`.
 
 mod flight;
+mod problem;
+mod place;
+mod time;
+mod draft;
+mod file;
+mod inline;
 
-pub use flight::{Flight, RoutePoint, Stop};
+pub use draft::Origin;
+pub use file::flight_file;
+pub use flight::{Flight, PolarLimits, RoutePoint, Stop};
+pub use inline::{Inline, inline_flight, instant_argument, place_argument};
+pub use problem::{IntakeError, Problem};

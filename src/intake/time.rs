@@ -1,25 +1,24 @@
 //! Instants and durations as people write them.
 
 use super::problem::Problem;
-use crate::sky::answers_for;
 use crate::units::Instant;
 use chrono::{DateTime, FixedOffset, NaiveDateTime, Utc};
 
 /// Reads an instant: RFC 3339 with an offset or Z; the seconds may be left out and a space may stand for the T.
-pub fn instant(text: &str) -> Result<Instant, Problem> {
+pub(super) fn instant(text: &str) -> Result<Instant, Problem> {
     let text = text.trim();
     let full = with_seconds(text);
     let parsed: DateTime<FixedOffset> = DateTime::parse_from_rfc3339(&full).map_err(|_| not_an_instant(text))?;
     let instant = Instant::from_utc(parsed.with_timezone(&Utc));
-    if answers_for(instant) { Ok(instant) } else { Err(Problem::Years(text.to_string())) }
+    if instant.is_answered_for() { Ok(instant) } else { Err(Problem::Years { given: text.to_string() }) }
 }
 
 /// `2026-12-18 05:10Z` as RFC 3339 writes it.
 fn with_seconds(text: &str) -> String {
-    let Some(time) = text.get(11..) else { return text.to_string() };
+    let (Some(date), Some(time)) = (text.get(..10), text.get(11..)) else { return text.to_string() };
     let clock = time.find(['Z', 'z', '+', '-']).unwrap_or(time.len());
     let seconds = if time[..clock].matches(':').count() == 1 { ":00" } else { "" };
-    format!("{}T{}{seconds}{}", &text[..10], &time[..clock], &time[clock..])
+    format!("{date}T{}{seconds}{}", &time[..clock], &time[clock..])
 }
 
 fn not_an_instant(text: &str) -> Problem {
@@ -74,7 +73,7 @@ mod tests {
         assert!(matches!(instant("2026-12-18T05:10"), Err(Problem::NoOffset(_))));
         assert!(matches!(instant("tomorrow"), Err(Problem::Instant(_))));
         assert!(matches!(instant("2026-13-18T05:10Z"), Err(Problem::Instant(_))));
-        assert!(matches!(instant("1900-01-01T00:00Z"), Err(Problem::Years(_))));
+        assert!(matches!(instant("1900-01-01T00:00Z"), Err(Problem::Years { .. })));
         assert!(matches!(instant("2026-12-1\u{661}é05:10Z"), Err(Problem::Instant(_))));
     }
 

@@ -2,7 +2,8 @@
 
 use super::fly::Path;
 use super::leg::Leg;
-use crate::units::{Angle, Latitude, Place, PlaceError};
+use crate::intake::PolarLimits;
+use crate::units::{Angle, Place};
 
 /// A line on the Earth that is watched for.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
@@ -60,59 +61,19 @@ pub struct CircleCrossing {
     pub place: Place,
 }
 
-/// Where the polar areas begin.
-///
-/// # Source
-/// 14 CFR 121.7 (72 FR 1878, 16 January 2007): the North Polar Area is all north of 78°00′N, the South Polar Area all
-/// south of 60°00′S. Other states draw them elsewhere (67°S in AC-OPS 27 of one, 2010), so both can be given.
-#[derive(Debug, Clone, Copy, PartialEq)]
-pub struct PolarAreas {
-    north: Latitude,
-    south: Latitude,
-}
-
-impl PolarAreas {
-    /// Limits in degrees of latitude, north positive.
-    ///
-    /// # Errors
-    /// A latitude that does not exist, or one in the wrong hemisphere.
-    pub fn from_deg(north: f64, south: f64) -> Result<Self, PlaceError> {
-        if !(0.0..=90.0).contains(&north) {
-            return Err(PlaceError::NorthernLimit(north));
-        }
-        if !(-90.0..=0.0).contains(&south) {
-            return Err(PlaceError::SouthernLimit(south));
-        }
-        Ok(Self { north: Latitude::from_deg(north)?, south: Latitude::from_deg(south)? })
-    }
-
-    /// The limits of 14 CFR 121.7, in degrees north: 78 and −60.
-    pub const CFR_121_7: (f64, f64) = (78.0, -60.0);
-
-    /// The northern area's limit.
-    pub fn north(&self) -> Latitude {
-        self.north
-    }
-
-    /// The southern area's limit.
-    pub fn south(&self) -> Latitude {
-        self.south
-    }
-}
-
-/// All watched circles for an obliquity and a choice of polar areas.
-fn watched(true_obliquity: Angle, areas: PolarAreas) -> [Circle; 7] {
+/// All watched circles for an obliquity and a choice of polar limits.
+fn watched(true_obliquity: Angle, limits: PolarLimits) -> [Circle; 7] {
     use CircleName::{AntarcticCircle, ArcticCircle, Equator, NorthPolarArea, SouthPolarArea, TropicOfCancer, TropicOfCapricorn};
     let polar = Angle::from_deg(90.0) - true_obliquity;
     let at = |name, latitude| Circle { name, latitude: Some(latitude) };
     [
-        at(NorthPolarArea, areas.north.angle()),
+        at(NorthPolarArea, limits.north.angle()),
         at(ArcticCircle, polar),
         at(TropicOfCancer, true_obliquity),
         at(Equator, Angle::ZERO),
         at(TropicOfCapricorn, -true_obliquity),
         at(AntarcticCircle, -polar),
-        at(SouthPolarArea, areas.south.angle()),
+        at(SouthPolarArea, limits.south.angle()),
     ]
 }
 
@@ -121,9 +82,9 @@ fn watched(true_obliquity: Angle, areas: PolarAreas) -> [Circle; 7] {
 /// # Accuracy
 /// Exact on the geodesic (no search). A path that only touches a circle does not cross it. The obliquity is one value
 /// for the flight: in a day it changes by less than 0.3″, 10 m on the ground.
-pub fn circles(path: &Path, true_obliquity: Angle, areas: PolarAreas) -> Vec<CircleCrossing> {
+pub fn circles(path: &Path, true_obliquity: Angle, limits: PolarLimits) -> Vec<CircleCrossing> {
     let mut found = Vec::new();
-    for circle in watched(true_obliquity, areas) {
+    for circle in watched(true_obliquity, limits) {
         let Some(latitude) = circle.latitude else { continue };
         let mut one = Vec::new();
         for leg in path.legs() {

@@ -5,8 +5,6 @@ use super::leg::Leg;
 use crate::intake::Flight;
 use crate::units::{Angle, Instant, Metres, Place, Vector};
 
-/// The longest time in the air that is taken for a flight, in seconds: a day and a half.
-pub const LONGEST_S: f64 = 36.0 * 3600.0;
 /// The highest ground speed that is taken for a flight.
 const FASTEST_KT: f64 = 1500.0;
 /// One knot in metres a second (ICAO Annex 5, table 3-3).

@@ -8,7 +8,8 @@ mod fly;
 mod circle;
 mod extent;
 
-pub use circle::{Circle, CircleCrossing, CircleName, Heading, PolarAreas, circles};
-pub use fly::{FlightError, LONGEST_S, Path, Position, fly};
+pub use circle::{Circle, CircleCrossing, CircleName, Heading, circles};
+pub use extent::Passed;
+pub use fly::{FlightError, Path, Position, fly};
 pub use geodesic::{Line, LinePoint};
 pub use leg::Leg;

@@ -13,8 +13,7 @@ mod year;
 pub use almanac::Almanac;
 pub use observer::{GeometricElevation, azimuth, elevation, sine_of_elevation};
 pub use sun::SunPlace;
-pub use table::{Sky, SkyError, SunWindow};
-pub use time::{DUT1_BOUND_S, YEARS, answers_for, dut1_s};
+pub use table::{Sky, SunWindow};
 pub use year::{YearEvent, YearMoment, year_moments};
 
 /// The rate at which the mean Sun turns about the Earth's axis, in rad/s.

@@ -7,9 +7,9 @@
 
 use super::model::apparent;
 use super::sun::SunPlace;
-use super::time::{DUT1_BOUND_S, dut1_s, tt_minus_utc_s};
+use super::time::tt_minus_utc_s;
 use crate::curve::{coefficients, lobatto};
-use crate::units::Instant;
+use crate::units::{Dut1, Instant};
 use std::f64::consts::TAU;
 use std::sync::OnceLock;
 
@@ -27,14 +27,6 @@ const PIECES: usize = 5848;
 /// Earth rotation angle in turns at J2000.0 UT1 and its excess over a turn a day (IAU 2000 resolution B1.8).
 const ROTATION_AT_J2000: f64 = 0.779_057_273_264_0;
 const ROTATION_EXCESS: f64 = 0.002_737_811_911_354_48;
-
-/// What the sky cannot do.
-#[derive(Debug, Clone, Copy, PartialEq, thiserror::Error)]
-pub enum SkyError {
-    /// UT1 − UTC is more than UTC allows.
-    #[error("UT1 − UTC of {0} s is outside −{DUT1_BOUND_S} s to {DUT1_BOUND_S} s")]
-    Dut1(f64),
-}
 
 /// One piece: four series (the direction's components in the mean Sun's frame, the distance in au).
 #[derive(Debug)]
@@ -56,18 +48,14 @@ pub struct Sky {
 
 impl Default for Sky {
     fn default() -> Self {
-        Self { dut1_s: 0.0, pieces: (0..PIECES).map(|_| OnceLock::new()).collect() }
+        Self::new(Dut1::default())
     }
 }
 
 impl Sky {
-    /// The sky for a value of UT1 − UTC in seconds.
-    ///
-    /// # Errors
-    /// More than 0.9 s either way, or not a number.
-    pub fn with_dut1_s(seconds: f64) -> Result<Self, SkyError> {
-        let dut1_s = dut1_s(seconds).ok_or(SkyError::Dut1(seconds))?;
-        Ok(Self { dut1_s, ..Self::default() })
+    /// The sky for a value of UT1 − UTC.
+    pub fn new(dut1: Dut1) -> Self {
+        Self { dut1_s: dut1.s(), pieces: (0..PIECES).map(|_| OnceLock::new()).collect() }
     }
 
     /// UT1 − UTC in seconds.
@@ -170,8 +158,8 @@ fn in_mean_frame(tt_days: f64) -> [f64; 4] {
 #[cfg(test)]
 mod tests {
     use super::super::model;
-    use super::{Sky, TAU};
-    use crate::units::{Instant, dot};
+    use super::Sky;
+    use crate::units::{Dut1, Instant, dot};
 
     /// Straight from the model, by Earth rotation angle of UT1 = UTC.
     fn direct(instant: Instant) -> [f64; 3] {
@@ -198,11 +186,10 @@ mod tests {
     #[test]
     fn ut1_turns_the_earth_and_leaves_the_declination() {
         let instant = Instant::from_seconds(8.5e8);
-        let (a, b) = (Sky::default().sun_at(instant), Sky::with_dut1_s(0.5).unwrap().sun_at(instant));
+        let (a, b) = (Sky::default().sun_at(instant), Sky::new(Dut1::from_s(0.5).unwrap()).sun_at(instant));
         let turned = (b.gha() - a.gha()).deg();
         assert!((turned - 0.5 * 1.002_737_9 * 360.0 / 86_400.0).abs() < 1e-9, "{turned}");
         assert_eq!(a.declination(), b.declination());
-        assert!(Sky::with_dut1_s(1.0).is_err());
-        assert!((TAU - 6.283_185).abs() < 1e-6);
+        assert!(Dut1::from_s(1.0).is_err() && Dut1::from_s(f64::NAN).is_err());
     }
 }

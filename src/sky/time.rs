@@ -1,27 +1,10 @@
-//! Time scales: UTC, TT and UT1, and the years that are answered for.
+//! Time scales: from UTC to TT.
 
-use crate::units::Instant;
+use crate::units::{Instant, YEARS};
 use chrono::Datelike;
-
-/// The first and last calendar year (UTC) that the sky answers for: leap seconds are whole from 1972, and the IAU
-/// series and the ephemeris are stated for 1900 to 2100.
-pub const YEARS: std::ops::RangeInclusive<i32> = 1973..=2100;
-
-/// Largest |UT1 − UTC| in seconds that UTC allows (Recommendation ITU-R TF.460-6, annex 1).
-pub const DUT1_BOUND_S: f64 = 0.9;
 
 /// TT − TAI in seconds, by definition (IAU 1991 resolution A4, recommendation IV).
 const TT_MINUS_TAI_S: f64 = 32.184;
-
-/// Whether the sky answers for this instant.
-pub fn answers_for(instant: Instant) -> bool {
-    YEARS.contains(&instant.utc().year())
-}
-
-/// A value for UT1 − UTC in seconds, if it is one that UTC allows.
-pub fn dut1_s(seconds: f64) -> Option<f64> {
-    (seconds.abs() <= DUT1_BOUND_S).then_some(seconds)
-}
 
 /// TT − UTC in seconds: the leap-second table of the IAU routines, its last value kept for the future.
 pub(super) fn tt_minus_utc_s(instant: Instant) -> f64 {
@@ -39,7 +22,7 @@ pub(super) fn tt_days(instant: Instant) -> f64 {
 
 #[cfg(test)]
 mod tests {
-    use super::{answers_for, tt_minus_utc_s};
+    use super::tt_minus_utc_s;
     use crate::units::Instant;
     use chrono::{DateTime, Utc};
 
@@ -53,12 +36,5 @@ mod tests {
         assert!((tt_minus_utc_s(at("2016-12-31T23:59:59Z")) - 68.184).abs() < 1e-9);
         assert!((tt_minus_utc_s(at("2017-01-01T00:00:00Z")) - 69.184).abs() < 1e-9);
         assert!((tt_minus_utc_s(at("2099-06-01T00:00:00Z")) - 69.184).abs() < 1e-9);
-    }
-
-    #[test]
-    fn years_outside_the_span_are_not_answered_for() {
-        assert!(!answers_for(at("1972-12-31T23:59:59Z")));
-        assert!(answers_for(at("1973-01-01T00:00:00Z")) && answers_for(at("2100-12-31T23:59:59Z")));
-        assert!(!answers_for(at("2101-01-01T00:00:00Z")));
     }
 }

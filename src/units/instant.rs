@@ -2,7 +2,11 @@
 //!
 //! Does not know leap seconds: like a clock that repeats 23:59:59, it counts 86,400 s to each day.
 
-use chrono::{DateTime, Utc};
+use chrono::{DateTime, Datelike, Utc};
+
+/// The first and last calendar year (UTC) that is answered for: leap seconds are whole from 1972, and the IAU series
+/// and the ephemeris are stated for 1900 to 2100.
+pub const YEARS: std::ops::RangeInclusive<i32> = 1973..=2100;
 
 /// An instant of UTC: seconds since 2000-01-01 12:00:00 UTC in days of 86,400 s.
 ///
@@ -39,6 +43,11 @@ impl Instant {
         DateTime::from_timestamp_micros(micros).unwrap_or_default()
     }
 
+    /// Whether the instant lies within the years that are answered for.
+    pub fn is_answered_for(self) -> bool {
+        YEARS.contains(&self.utc().year())
+    }
+
     /// The instant `seconds` later.
     #[must_use]
     pub fn after_s(self, seconds: f64) -> Self {
@@ -55,6 +64,13 @@ impl Instant {
 mod tests {
     use super::Instant;
     use chrono::{DateTime, Utc};
+
+    #[test]
+    fn years_outside_the_span_are_not_answered_for() {
+        let at = |text: &str| Instant::from_utc(text.parse::<DateTime<Utc>>().unwrap()).is_answered_for();
+        assert!(!at("1972-12-31T23:59:59Z") && at("1973-01-01T00:00:00Z"));
+        assert!(at("2100-12-31T23:59:59Z") && !at("2101-01-01T00:00:00Z"));
+    }
 
     #[test]
     fn a_calendar_time_survives_the_count() {

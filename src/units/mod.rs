@@ -8,10 +8,12 @@ mod place;
 mod metres;
 mod instant;
 mod vector;
+mod ut1;
 
 pub use angle::Angle;
 pub use ellipsoid::wgs84;
-pub use instant::Instant;
+pub use instant::{Instant, YEARS};
 pub use metres::Metres;
 pub use place::{Latitude, Longitude, Place, PlaceError};
+pub use ut1::{DUT1_BOUND_S, Dut1, Dut1Error};
 pub use vector::{Vector, dot};

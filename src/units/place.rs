@@ -11,12 +11,9 @@ pub enum PlaceError {
     /// Not a finite longitude within a turn.
     #[error("longitude {0}° is outside −180° to 360°")]
     Longitude(f64),
-    /// Not a northern latitude.
-    #[error("the North Polar Area's limit of {0}° is outside 0° to 90°")]
-    NorthernLimit(f64),
-    /// Not a southern latitude.
-    #[error("the South Polar Area's limit of {0}° is outside −90° to 0°")]
-    SouthernLimit(f64),
+    /// Not a latitude counted from the equator.
+    #[error("a polar area's limit of {0}° is outside 0° to 90°")]
+    PolarLimit(f64),
 }
 
 /// A geodetic latitude, positive north, −90° to 90°.
@@ -28,6 +25,11 @@ pub struct Latitude(Angle);
 pub struct Longitude(Angle);
 
 impl Latitude {
+    /// 78° north.
+    pub const NORTH_78: Self = Self(Angle::from_deg(78.0));
+    /// 60° south.
+    pub const SOUTH_60: Self = Self(Angle::from_deg(-60.0));
+
     /// A latitude from degrees north.
     ///
     /// # Errors

@@ -1,0 +1,151 @@
+//! A flight as given, each value with where it stands, and the checks that make it a [`Flight`].
+
+use super::flight::{Flight, PolarLimits, RoutePoint, Stop};
+use super::place::Named;
+use super::problem::{IntakeError, Problem};
+use crate::units::{Dut1, Instant, Metres};
+
+/// The longest time in the air that is taken for a flight: a day and a half.
+const LONGEST_H: f64 = 36.0;
+/// The most waypoints of one flight.
+pub(super) const MOST_WAYPOINTS: usize = 20_000;
+
+/// Where a value stands.
+#[derive(Debug, Clone, PartialEq, Eq)]
+pub enum Origin {
+    /// In a file: line and column, from 1.
+    At(usize, usize),
+    /// The whole file.
+    Whole,
+    /// A command-line option.
+    Option(&'static str),
+}
+
+impl std::fmt::Display for Origin {
+    fn fmt(&self, f: &mut std::fmt::Formatter<'_>) -> std::fmt::Result {
+        match self {
+            Self::At(line, column) => write!(f, ":{line}:{column}"),
+            Self::Whole => Ok(()),
+            Self::Option(name) => write!(f, "{name}"),
+        }
+    }
+}
+
+/// A value and where it stands.
+#[derive(Debug, Clone)]
+pub(super) struct Given<T> {
+    pub(super) value: T,
+    pub(super) origin: Origin,
+}
+
+/// Everything that was given, read but not yet held against each other.
+#[derive(Debug, Clone)]
+pub(super) struct Draft {
+    pub(super) source_name: String,
+    pub(super) name: Option<String>,
+    pub(super) from: Named,
+    pub(super) to: Named,
+    pub(super) takeoff: Given<Instant>,
+    pub(super) airborne_s: Option<Given<f64>>,
+    pub(super) landing: Option<Given<Instant>>,
+    pub(super) level_ft: Option<Given<f64>>,
+    pub(super) waypoints: Vec<Given<RoutePoint>>,
+    pub(super) polar_limits: Option<PolarLimits>,
+    pub(super) dut1: Option<Dut1>,
+}
+
+/// RFC 3339 in UTC to the second, for messages.
+fn said(instant: Instant) -> String {
+    instant.utc().format("%Y-%m-%dT%H:%M:%SZ").to_string()
+}
+
+impl Draft {
+    /// Holds the values against each other.
+    pub(super) fn checked(self) -> Result<Flight, IntakeError> {
+        let source_name = self.source_name.clone();
+        let fail = |origin: &Origin, problem| IntakeError { source_name: source_name.clone(), origin: origin.clone(), problem };
+        let takeoff = self.takeoff.value;
+        let landing = self.landing().map_err(|(origin, problem)| fail(&origin, problem))?;
+        check_duration(takeoff, landing.value).map_err(|problem| fail(&landing.origin, problem))?;
+        if let Some(level) = self.level_ft.as_ref().filter(|level| !(0.0..=60_000.0).contains(&level.value)) {
+            return Err(fail(&level.origin, Problem::Level(level.value)));
+        }
+        check_order(&self.waypoints, takeoff, landing.value).map_err(|(origin, problem)| fail(&origin, problem))?;
+        let name = self.name.filter(|name| !name.trim().is_empty());
+        let (from, to) = (stop(self.from), stop(self.to));
+        let name = name.unwrap_or_else(|| {
+            format!("{}-{} {}", from.label, to.label, takeoff.utc().format("%Y-%m-%d %H%MZ"))
+        });
+        Ok(Flight {
+            name,
+            from,
+            to,
+            takeoff,
+            landing: landing.value,
+            level: self.level_ft.map(|level| Metres::from_feet(level.value)),
+            waypoints: self.waypoints.into_iter().map(|w| w.value).collect(),
+            polar_limits: self.polar_limits,
+            dut1: self.dut1,
+        })
+    }
+
+    /// The landing, from whichever of its two forms was given.
+    fn landing(&self) -> Result<Given<Instant>, (Origin, Problem)> {
+        let by_airborne = self.airborne_s.as_ref().map(|airborne| Given {
+            value: self.takeoff.value.after_s(airborne.value),
+            origin: airborne.origin.clone(),
+        });
+        match (by_airborne, self.landing.clone()) {
+            (None, None) => {
+                Err((Origin::Whole, Problem::Landing("neither 'airborne' nor 'landing' says when the flight ends")))
+            }
+            (Some(one), None) | (None, Some(one)) => Ok(one),
+            // to the second, as both may have been rounded
+            (Some(a), Some(b)) if a.value.since_s(b.value).abs() <= 1.0 => Ok(b),
+            (Some(a), Some(b)) => {
+                let conflict = Problem::LandingConflict { by_airborne: said(a.value), by_landing: said(b.value) };
+                Err((b.origin, conflict))
+            }
+        }
+    }
+}
+
+fn check_duration(takeoff: Instant, landing: Instant) -> Result<(), Problem> {
+    let hours = landing.since_s(takeoff) / 3600.0;
+    if hours <= 0.0 {
+        return Err(Problem::LandingFirst { takeoff: said(takeoff), landing: said(landing) });
+    }
+    if hours > LONGEST_H {
+        return Err(Problem::TooLong { hours, longest: LONGEST_H });
+    }
+    if landing.is_answered_for() { Ok(()) } else { Err(Problem::Years { given: said(landing) }) }
+}
+
+/// Waypoint times rise strictly from take-off to landing.
+fn check_order(waypoints: &[Given<RoutePoint>], takeoff: Instant, landing: Instant) -> Result<(), (Origin, Problem)> {
+    let (mut last, mut before) = (takeoff, format!("the take-off at {}", said(takeoff)));
+    for (i, point) in waypoints.iter().enumerate() {
+        let Some(time) = point.value.time else { continue };
+        let (number, label) = (i + 1, point.value.label.clone());
+        if time <= last {
+            let problem = Problem::OutOfOrder { number, label, time: said(time), before };
+            return Err((point.origin.clone(), problem));
+        }
+        if time >= landing {
+            let problem = Problem::AfterLanding { number, label, time: said(time), landing: said(landing) };
+            return Err((point.origin.clone(), problem));
+        }
+        before = format!("waypoint {number} ({label}) at {}", said(time));
+        last = time;
+    }
+    Ok(())
+}
+
+fn stop(named: Named) -> Stop {
+    Stop {
+        label: named.label,
+        name: named.aerodrome.map(|a| a.name().to_string()),
+        place: named.place,
+        zone: named.aerodrome.map(|a| a.zone()),
+    }
+}

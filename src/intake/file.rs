@@ -1,0 +1,200 @@
+//! Flight files: TOML, read value by value so that each error names its line and column.
+
+use super::draft::{Draft, Given, MOST_WAYPOINTS, Origin};
+use super::flight::{Flight, PolarLimits, RoutePoint};
+use super::place::{Named, degrees, place};
+use super::problem::{IntakeError, Problem};
+use super::time::{duration_s, instant};
+use crate::units::{Dut1, Instant};
+use std::ops::Range;
+use toml::Spanned;
+use toml::de::{DeTable, DeValue};
+
+/// What a flight file may hold.
+pub(super) const FIELDS: [&str; 10] =
+    ["name", "from", "to", "takeoff", "landing", "airborne", "level_ft", "dut1_s", "waypoint", "polar_areas"];
+/// What a waypoint may hold.
+pub(super) const WAYPOINT_FIELDS: [&str; 2] = ["at", "time"];
+const PLACE_FIELDS: [&str; 2] = ["lat", "lon"];
+const POLAR_FIELDS: [&str; 2] = ["north_deg", "south_deg"];
+
+/// A value of the file or what is wrong with it, with the bytes it stands on.
+type Found<T> = Result<T, (Range<usize>, Problem)>;
+type Value<'a> = Spanned<DeValue<'a>>;
+
+/// Reads a flight file's text.
+///
+/// # Errors
+/// Anything that keeps the flight from being flown, with the line and column it stands on.
+pub fn flight_file(text: &str, source_name: &str) -> Result<Flight, IntakeError> {
+    let fail = |origin, problem| IntakeError { source_name: source_name.to_string(), origin, problem };
+    if text.trim().is_empty() {
+        return Err(fail(Origin::Whole, Problem::Empty));
+    }
+    let parsed = DeTable::parse(text).map_err(|error| {
+        let origin = error.span().map_or(Origin::Whole, |span| line_and_column(text, span.start));
+        fail(origin, Problem::Toml(error.message().replace('\n', ", ")))
+    })?;
+    let reader = Reader { text };
+    let draft = reader.draft(parsed.get_ref(), source_name).map_err(|(span, problem)| {
+        // a field that is missing stands nowhere
+        let missing = matches!(problem, Problem::MissingField(_)) && span.is_empty();
+        fail(if missing { Origin::Whole } else { line_and_column(text, span.start) }, problem)
+    })?;
+    draft.checked()
+}
+
+fn line_and_column(text: &str, byte: usize) -> Origin {
+    let before = text.get(..byte).unwrap_or(text);
+    let line = before.matches('\n').count() + 1;
+    let column = before.rsplit('\n').next().map_or(0, |tail| tail.chars().count()) + 1;
+    Origin::At(line, column)
+}
+
+struct Reader<'t> {
+    text: &'t str,
+}
+
+impl Reader<'_> {
+    fn draft(&self, table: &DeTable<'_>, source_name: &str) -> Found<Draft> {
+        only(table, &FIELDS)?;
+        let need = |field: &'static str| table.get(field).ok_or((0..0, Problem::MissingField(field)));
+        Ok(Draft {
+            source_name: source_name.to_string(),
+            name: table.get("name").map(|v| string("name", v).map(str::to_string)).transpose()?,
+            from: named("from", need("from")?)?,
+            to: named("to", need("to")?)?,
+            takeoff: self.time("takeoff", need("takeoff")?)?,
+            airborne_s: table.get("airborne").map(|v| self.duration(v)).transpose()?,
+            landing: table.get("landing").map(|v| self.time("landing", v)).transpose()?,
+            level_ft: table.get("level_ft").map(|v| self.given(v, number("level_ft", v))).transpose()?,
+            waypoints: table.get("waypoint").map_or(Ok(Vec::new()), |v| self.waypoints(v))?,
+            polar_limits: table.get("polar_areas").map(polar_limits).transpose()?,
+            dut1: table.get("dut1_s").map(dut1).transpose()?,
+        })
+    }
+
+    /// A value with its place in the file.
+    fn given<T>(&self, at: &Value<'_>, value: Found<T>) -> Found<Given<T>> {
+        Ok(Given { value: value?, origin: line_and_column(self.text, at.span().start) })
+    }
+
+    fn time(&self, field: &'static str, value: &Value<'_>) -> Found<Given<Instant>> {
+        let text = match value.get_ref() {
+            DeValue::Datetime(datetime) => datetime.to_string(),
+            DeValue::String(text) => text.to_string(),
+            other => return Err(wrong(field, other, "a date and time with an offset", value.span())),
+        };
+        self.given(value, instant(&text).map_err(|problem| (value.span(), problem)))
+    }
+
+    fn duration(&self, value: &Value<'_>) -> Found<Given<f64>> {
+        let text = string("airborne", value)?;
+        self.given(value, duration_s(text).map_err(|problem| (value.span(), problem)))
+    }
+
+    fn waypoints(&self, value: &Value<'_>) -> Found<Vec<Given<RoutePoint>>> {
+        let Some(list) = value.get_ref().as_array() else {
+            return Err(wrong("waypoint", value.get_ref(), "written as [[waypoint]]", value.span()));
+        };
+        if list.len() > MOST_WAYPOINTS {
+            let problem = Problem::TooManyWaypoints { count: list.len(), most: MOST_WAYPOINTS };
+            return Err((value.span(), problem));
+        }
+        let mut lines = LineCounter { text: self.text, byte: 0, line: 1 };
+        list.iter().map(|point| self.waypoint(point, &mut lines)).collect()
+    }
+
+    fn waypoint(&self, value: &Value<'_>, lines: &mut LineCounter<'_>) -> Found<Given<RoutePoint>> {
+        let table = table("waypoint", value)?;
+        only(table, &WAYPOINT_FIELDS)?;
+        let at = table.get("at").ok_or((value.span(), Problem::MissingField("at")))?;
+        let named = named("at", at)?;
+        let time = table.get("time").map(|v| self.waypoint_time(v)).transpose()?;
+        let value = RoutePoint { label: named.label, place: named.place, time };
+        Ok(Given { value, origin: Origin::At(lines.line_of(at.span().start), 1) })
+    }
+
+    fn waypoint_time(&self, value: &Value<'_>) -> Found<Instant> {
+        // the line is found only for the few that fail: counting lines for each of many would be quadratic
+        let reader = Reader { text: "" };
+        reader.time("time", value).map(|given| given.value).map_err(|(span, problem)| {
+            debug_assert!(span.start <= self.text.len());
+            (span, problem)
+        })
+    }
+}
+
+/// Counts lines forward only, so that many waypoints cost one pass.
+struct LineCounter<'t> {
+    text: &'t str,
+    byte: usize,
+    line: usize,
+}
+
+impl LineCounter<'_> {
+    fn line_of(&mut self, byte: usize) -> usize {
+        if byte > self.byte {
+            self.line += self.text.as_bytes()[self.byte..byte].iter().filter(|&&b| b == b'\n').count();
+            self.byte = byte;
+        }
+        self.line
+    }
+}
+
+fn wrong(field: &'static str, found: &DeValue<'_>, wanted: &'static str, span: Range<usize>) -> (Range<usize>, Problem) {
+    (span, Problem::WrongType { field, found: found.type_str().to_string(), wanted })
+}
+
+/// Refuses fields that are not known, so that a misspelt one is not passed over in silence.
+fn only(table: &DeTable<'_>, known: &[&str]) -> Found<()> {
+    match table.keys().find(|key| !known.contains(&key.get_ref().as_ref())) {
+        Some(key) => Err((key.span(), Problem::UnknownField(key.get_ref().chars().take(40).collect()))),
+        None => Ok(()),
+    }
+}
+
+fn string<'a>(field: &'static str, value: &'a Value<'_>) -> Found<&'a str> {
+    value.get_ref().as_str().ok_or_else(|| wrong(field, value.get_ref(), "a string", value.span()))
+}
+
+fn table<'a, 'i>(field: &'static str, value: &'a Value<'i>) -> Found<&'a DeTable<'i>> {
+    value.get_ref().as_table().ok_or_else(|| wrong(field, value.get_ref(), "a table", value.span()))
+}
+
+fn number(field: &'static str, value: &Value<'_>) -> Found<f64> {
+    let text = match value.get_ref() {
+        DeValue::Float(float) => float.as_str().to_string(),
+        DeValue::Integer(integer) if integer.radix() == 10 => integer.as_str().to_string(),
+        other => return Err(wrong(field, other, "a number", value.span())),
+    };
+    // a NaN is a number to TOML but not to us: every range refuses it later, with its name
+    text.parse().map_err(|_| wrong(field, value.get_ref(), "a number", value.span()))
+}
+
+/// A place as a string or as `{ lat, lon }`.
+fn named(field: &'static str, value: &Value<'_>) -> Found<Named> {
+    match value.get_ref() {
+        DeValue::String(text) => place(text).map_err(|problem| (value.span(), problem)),
+        DeValue::Table(table) => {
+            only(table, &PLACE_FIELDS)?;
+            let part = |key| table.get(key).ok_or((value.span(), Problem::MissingField(key)));
+            let (lat, lon) = (number("lat", part("lat")?)?, number("lon", part("lon")?)?);
+            degrees(lat, lon).map_err(|problem| (value.span(), problem))
+        }
+        other => Err(wrong(field, other, "a code, coordinates or { lat, lon }", value.span())),
+    }
+}
+
+fn polar_limits(value: &Value<'_>) -> Found<PolarLimits> {
+    let table = table("polar_areas", value)?;
+    only(table, &POLAR_FIELDS)?;
+    let limit = |key, usual| table.get(key).map_or(Ok(usual), |v| number(key, v));
+    let usual = PolarLimits::default();
+    let (north, south) = (limit("north_deg", usual.north.deg())?, limit("south_deg", -usual.south.deg())?);
+    PolarLimits::from_deg(north, south).map_err(|error| (value.span(), error.into()))
+}
+
+fn dut1(value: &Value<'_>) -> Found<Dut1> {
+    Dut1::from_s(number("dut1_s", value)?).map_err(|error| (value.span(), error.into()))
+}

@@ -1,0 +1,77 @@
+//! A flight given on the command line instead of in a file.
+
+use super::draft::{Draft, Given, Origin};
+use super::flight::Flight;
+use super::place::{Named, place};
+use super::problem::{IntakeError, Problem};
+use super::time::{duration_s, instant};
+
+/// The texts of a flight's command-line options.
+#[derive(Debug, Clone, Default)]
+pub struct Inline<'a> {
+    /// `--name`
+    pub name: Option<&'a str>,
+    /// `--from`
+    pub from: &'a str,
+    /// `--to`
+    pub to: &'a str,
+    /// `--takeoff`
+    pub takeoff: &'a str,
+    /// `--airborne`
+    pub airborne: Option<&'a str>,
+    /// `--landing`
+    pub landing: Option<&'a str>,
+    /// `--level-ft`
+    pub level_ft: Option<f64>,
+}
+
+/// Reads a flight from its options.
+///
+/// # Errors
+/// Anything that keeps the flight from being flown, with the option it was given in.
+pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
+    let draft = Draft {
+        source_name: String::new(),
+        name: given.name.map(str::to_string),
+        from: read("--from", given.from, place)?.value,
+        to: read("--to", given.to, place)?.value,
+        takeoff: read("--takeoff", given.takeoff, instant)?,
+        airborne_s: given.airborne.map(|text| read("--airborne", text, duration_s)).transpose()?,
+        landing: given.landing.map(|text| read("--landing", text, instant)).transpose()?,
+        level_ft: given.level_ft.map(|value| Given { value, origin: Origin::Option("--level-ft") }),
+        waypoints: Vec::new(),
+        polar_limits: None,
+        dut1: None,
+    };
+    draft.checked()
+}
+
+/// A place given on its own: an aerodrome's code or coordinates, with its label and zone.
+///
+/// # Errors
+/// A code or coordinates that are not known, with the name of the argument.
+pub fn place_argument(argument: &'static str, text: &str) -> Result<super::Stop, IntakeError> {
+    let Given { value: Named { label, place, aerodrome }, .. } = read(argument, text, place)?;
+    let name = aerodrome.map(|a| a.name().to_string());
+    Ok(super::Stop { label, name, place, zone: aerodrome.map(|a| a.zone()) })
+}
+
+/// An instant given on its own.
+///
+/// # Errors
+/// A time that cannot be read or lies outside the years served, with the name of the argument.
+pub fn instant_argument(argument: &'static str, text: &str) -> Result<crate::units::Instant, IntakeError> {
+    read(argument, text, instant).map(|given| given.value)
+}
+
+fn read<T>(
+    option: &'static str,
+    text: &str,
+    reader: impl Fn(&str) -> Result<T, Problem>,
+) -> Result<Given<T>, IntakeError> {
+    let origin = Origin::Option(option);
+    match reader(text) {
+        Ok(value) => Ok(Given { value, origin }),
+        Err(problem) => Err(IntakeError { source_name: String::new(), origin, problem }),
+    }
+}

@@ -1,0 +1,179 @@
+//! What can be wrong with a flight as it was given, where it stands, and the cure.
+
+use super::draft::Origin;
+use crate::places::UnknownAerodrome;
+use crate::units::{Dut1Error, PlaceError, YEARS};
+
+/// Something is wrong with a flight as it was given.
+#[derive(Debug, Clone, PartialEq, thiserror::Error)]
+#[error("{source_name}{origin}: {problem}")]
+pub struct IntakeError {
+    /// The file's name, or nothing for a flight given on the command line.
+    pub source_name: String,
+    /// Where in it.
+    pub origin: Origin,
+    /// What.
+    pub problem: Problem,
+}
+
+impl IntakeError {
+    /// How to mend it, where that is known.
+    pub fn hint(&self) -> Option<String> {
+        self.problem.hint()
+    }
+}
+
+/// What is wrong.
+#[derive(Debug, Clone, PartialEq, thiserror::Error)]
+pub enum Problem {
+    /// Not TOML.
+    #[error("{0}")]
+    Toml(String),
+    /// Nothing in it.
+    #[error("the file is empty")]
+    Empty,
+    /// Not text.
+    #[error("the file is not UTF-8 text (byte {0})")]
+    NotText(usize),
+    /// A field that is not known.
+    #[error("unknown field '{0}'")]
+    UnknownField(String),
+    /// A field that must be there.
+    #[error("the field '{0}' is missing")]
+    MissingField(&'static str),
+    /// A field of the wrong kind.
+    #[error("'{field}' is {found}, but must be {wanted}")]
+    WrongType {
+        /// The field.
+        field: &'static str,
+        /// What stands there.
+        found: String,
+        /// What should.
+        wanted: &'static str,
+    },
+    /// A place that does not exist.
+    #[error(transparent)]
+    Place(#[from] PlaceError),
+    /// A UT1 − UTC that cannot be.
+    #[error(transparent)]
+    Dut1(#[from] Dut1Error),
+    /// A code that is not known.
+    #[error(transparent)]
+    UnknownAerodrome(UnknownAerodrome),
+    /// Coordinates that cannot be read.
+    #[error("'{0}' is no coordinate pair")]
+    Coordinates(String),
+    /// A time that cannot be read.
+    #[error("'{0}' is no date and time")]
+    Instant(String),
+    /// A time without an offset.
+    #[error("'{0}' says no offset from UTC")]
+    NoOffset(String),
+    /// A time outside the years served.
+    #[error("{given} is outside the years {first} to {last}", first = YEARS.start(), last = YEARS.end())]
+    Years {
+        /// As given.
+        given: String,
+    },
+    /// A duration that cannot be read.
+    #[error("'{0}' is no duration")]
+    Duration(String),
+    /// Neither or both of two fields.
+    #[error("{0}")]
+    Landing(&'static str),
+    /// Both given, and they disagree.
+    #[error("'airborne' puts the landing at {by_airborne}, 'landing' at {by_landing}")]
+    LandingConflict {
+        /// RFC 3339.
+        by_airborne: String,
+        /// RFC 3339.
+        by_landing: String,
+    },
+    /// The flight ends before it begins.
+    #[error("the landing at {landing} is not after the take-off at {takeoff}")]
+    LandingFirst {
+        /// RFC 3339.
+        takeoff: String,
+        /// RFC 3339.
+        landing: String,
+    },
+    /// A flight longer than any.
+    #[error("{hours:.1} h in the air is outside 0 h to {longest} h")]
+    TooLong {
+        /// Hours in the air.
+        hours: f64,
+        /// The longest that is taken.
+        longest: f64,
+    },
+    /// Waypoint times that do not rise.
+    #[error("waypoint {number} ({label}) at {time} is not after {before}")]
+    OutOfOrder {
+        /// Counted from 1.
+        number: usize,
+        /// As given.
+        label: String,
+        /// RFC 3339.
+        time: String,
+        /// What it must follow.
+        before: String,
+    },
+    /// A waypoint after the landing.
+    #[error("waypoint {number} ({label}) at {time} is not before the landing at {landing}")]
+    AfterLanding {
+        /// Counted from 1.
+        number: usize,
+        /// As given.
+        label: String,
+        /// RFC 3339.
+        time: String,
+        /// RFC 3339.
+        landing: String,
+    },
+    /// Too many waypoints.
+    #[error("{count} waypoints are more than the {most} that a flight file may have")]
+    TooManyWaypoints {
+        /// How many there are.
+        count: usize,
+        /// How many there may be.
+        most: usize,
+    },
+    /// A level no aircraft flies at.
+    #[error("a level of {0} ft is outside 0 ft to 60000 ft")]
+    Level(f64),
+}
+
+impl Problem {
+    fn hint(&self) -> Option<String> {
+        let text = match self {
+            Self::UnknownAerodrome(unknown) => return unknown_place_hint(unknown),
+            Self::Coordinates(_) => "write 7830N02000W, 78N020W or 78.5,-20",
+            Self::Instant(_) | Self::NoOffset(_) => "write 2026-12-18T05:10Z, or 2026-12-18T00:10-05:00 with an offset",
+            Self::Duration(_) => "write 14h55m, 14h or 55m",
+            Self::NotText(_) => "a flight file is TOML in UTF-8; save it as UTF-8 without a byte-order mark",
+            Self::Empty => "a flight file needs at least from, to, takeoff, and airborne or landing",
+            Self::UnknownField(field) => return near_field(field),
+            Self::Landing(_) => "give one of airborne = \"14h55m\" and landing = 2026-12-18T20:05:00Z",
+            Self::LandingConflict { .. } => "leave one of them out",
+            _ => return None,
+        };
+        Some(text.to_string())
+    }
+}
+
+/// Near codes, or how coordinates are written for a text that looks like them.
+fn unknown_place_hint(unknown: &UnknownAerodrome) -> Option<String> {
+    if unknown.code().bytes().any(|b| b.is_ascii_digit()) {
+        return Some("coordinates begin with digits: 7830N02000W, 78N020W or 78.5,-20".to_string());
+    }
+    unknown.hint()
+}
+
+/// The known field that a misspelt one shares most letters' pairs with.
+fn near_field(field: &str) -> Option<String> {
+    let known = super::file::FIELDS.iter().chain(&super::file::WAYPOINT_FIELDS);
+    let pairs = |word: &str| word.as_bytes().windows(2).map(<[u8]>::to_vec).collect::<Vec<_>>();
+    let given = pairs(&field.to_ascii_lowercase());
+    let shared = |word: &str| pairs(word).iter().filter(|pair| given.contains(pair)).count();
+    let best = known.max_by_key(|word| shared(word))?;
+    (shared(best) * 2 >= best.len() - 1).then(|| format!("did you mean '{best}'?"))
+}
