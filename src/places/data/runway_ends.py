@@ -37,6 +37,11 @@ def midpoints(rows):
     return [((a[0] + b[0]) / 2, (a[1] + b[1]) / 2) for a, b in pairs if a and b]
 
 
+def opposite(name):
+    """The designator of the other end."""
+    return f"{(int(name[:2]) + 17) % 36 + 1:02d}" + {"L": "R", "R": "L"}.get(name[2:], name[2:])
+
+
 def turn(deg):
     """The angle brought into [-180°, 180°)."""
     return (deg + 180.0) % 360.0 - 180.0
@@ -46,6 +51,8 @@ def fault(row, low, high, near):
     """Why a runway cannot be used, or None."""
     if not (designator(row["le_ident"]) and designator(row["he_ident"])):
         return "no pair of runway designators"
+    if designator(row["he_ident"]) != opposite(designator(row["le_ident"])):
+        return "the designators are not opposite"
     if not (low and high):
         return "an end without coordinates"
     length = metres_between(low, high)
