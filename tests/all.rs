@@ -1,3 +1,7 @@
 //! The table of contents of everything that is checked against the outside.
 
+mod tables;
 mod places;
+mod sky;
+mod path;
+mod light;

@@ -8,7 +8,8 @@ impl Curve {
     /// # Accuracy
     /// 1e−10 of the curve's half duration, or the last bit of the value where the curve is flat.
     pub fn meets(&self, level: f64, from_s: f64, to_s: f64) -> f64 {
-        let scaled = |t: f64| ((t - self.time_s(0.0)) / (self.time_s(1.0) - self.time_s(0.0))).clamp(-1.0, 1.0);
+        let scaled =
+            |t: f64| ((t - self.time_s(0.0)) / (self.time_s(1.0) - self.time_s(0.0))).clamp(-1.0, 1.0);
         let (mut low, mut high) = (scaled(from_s), scaled(to_s));
         let (at_low, at_high) = (self.value_x(low) - level, self.value_x(high) - level);
         let rising = at_high >= at_low;
@@ -19,7 +20,11 @@ impl Curve {
         for _ in 0..80 {
             let [value, slope, _] = self.jet_x(x);
             let gap = value - level;
-            if (gap < 0.0) == rising { low = x } else { high = x }
+            if (gap < 0.0) == rising {
+                low = x
+            } else {
+                high = x
+            }
             let next = x - gap / slope;
             let next = if next > low && next < high { next } else { f64::midpoint(low, high) };
             if (next - x).abs() < 1e-10 {

@@ -146,7 +146,11 @@ impl Curve {
         }
         for _ in 0..60 {
             let [_, slope, bend] = self.jet_x(x);
-            if slope * cell.slope_from > 0.0 { low = x } else { high = x }
+            if slope * cell.slope_from > 0.0 {
+                low = x
+            } else {
+                high = x
+            }
             let next = x - slope / bend;
             let next = if next >= low && next <= high { next } else { f64::midpoint(low, high) };
             // the value errs by half the bend times the square of this

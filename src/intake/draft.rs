@@ -63,14 +63,19 @@ impl Draft {
     /// Holds the values against each other.
     pub(super) fn checked(self) -> Result<Flight, IntakeError> {
         let source_name = self.source_name.clone();
-        let fail = |origin: &Origin, problem| IntakeError { source_name: source_name.clone(), origin: origin.clone(), problem };
+        let fail = |origin: &Origin, problem| IntakeError {
+            source_name: source_name.clone(),
+            origin: origin.clone(),
+            problem,
+        };
         let takeoff = self.takeoff.value;
         let landing = self.landing().map_err(|(origin, problem)| fail(&origin, problem))?;
         check_duration(takeoff, landing.value).map_err(|problem| fail(&landing.origin, problem))?;
         if let Some(level) = self.level_ft.as_ref().filter(|level| !(0.0..=60_000.0).contains(&level.value)) {
             return Err(fail(&level.origin, Problem::Level(level.value)));
         }
-        check_order(&self.waypoints, takeoff, landing.value).map_err(|(origin, problem)| fail(&origin, problem))?;
+        check_order(&self.waypoints, takeoff, landing.value)
+            .map_err(|(origin, problem)| fail(&origin, problem))?;
         let name = self.name.filter(|name| !name.trim().is_empty());
         let (from, to) = (stop(self.from), stop(self.to));
         let name = name.unwrap_or_else(|| {
@@ -96,14 +101,16 @@ impl Draft {
             origin: airborne.origin.clone(),
         });
         match (by_airborne, self.landing.clone()) {
-            (None, None) => {
-                Err((Origin::Whole, Problem::Landing("neither 'airborne' nor 'landing' says when the flight ends")))
-            }
+            (None, None) => Err((
+                Origin::Whole,
+                Problem::Landing("neither 'airborne' nor 'landing' says when the flight ends"),
+            )),
             (Some(one), None) | (None, Some(one)) => Ok(one),
             // to the second, as both may have been rounded
             (Some(a), Some(b)) if a.value.since_s(b.value).abs() <= 1.0 => Ok(b),
             (Some(a), Some(b)) => {
-                let conflict = Problem::LandingConflict { by_airborne: said(a.value), by_landing: said(b.value) };
+                let conflict =
+                    Problem::LandingConflict { by_airborne: said(a.value), by_landing: said(b.value) };
                 Err((b.origin, conflict))
             }
         }
@@ -122,7 +129,11 @@ fn check_duration(takeoff: Instant, landing: Instant) -> Result<(), Problem> {
 }
 
 /// Waypoint times rise strictly from take-off to landing.
-fn check_order(waypoints: &[Given<RoutePoint>], takeoff: Instant, landing: Instant) -> Result<(), (Origin, Problem)> {
+fn check_order(
+    waypoints: &[Given<RoutePoint>],
+    takeoff: Instant,
+    landing: Instant,
+) -> Result<(), (Origin, Problem)> {
     let (mut last, mut before) = (takeoff, format!("the take-off at {}", said(takeoff)));
     for (i, point) in waypoints.iter().enumerate() {
         let Some(time) = point.value.time else { continue };

@@ -142,7 +142,12 @@ impl LineCounter<'_> {
     }
 }
 
-fn wrong(field: &'static str, found: &DeValue<'_>, wanted: &'static str, span: Range<usize>) -> (Range<usize>, Problem) {
+fn wrong(
+    field: &'static str,
+    found: &DeValue<'_>,
+    wanted: &'static str,
+    span: Range<usize>,
+) -> (Range<usize>, Problem) {
     (span, Problem::WrongType { field, found: found.type_str().to_string(), wanted })
 }
 

@@ -69,7 +69,8 @@ impl PolarLimits {
     /// # Errors
     /// Outside 0° to 90°.
     pub fn from_deg(north: f64, south: f64) -> Result<Self, PlaceError> {
-        let limit = |deg: f64| if (0.0..=90.0).contains(&deg) { Ok(deg) } else { Err(PlaceError::PolarLimit(deg)) };
+        let limit =
+            |deg: f64| if (0.0..=90.0).contains(&deg) { Ok(deg) } else { Err(PlaceError::PolarLimit(deg)) };
         Ok(Self { north: Latitude::from_deg(limit(north)?)?, south: Latitude::from_deg(-limit(south)?)? })
     }
 }

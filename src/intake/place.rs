@@ -93,7 +93,18 @@ mod tests {
 
     #[test]
     fn spellings_that_mean_nothing_are_refused() {
-        for text in ["", "78N", "7860N02000W", "78N02W", "95N020W", "10N190E", "7830N20W", "1,2,3", "NaN,0", "9\u{661}N020W"] {
+        for text in [
+            "",
+            "78N",
+            "7860N02000W",
+            "78N02W",
+            "95N020W",
+            "10N190E",
+            "7830N20W",
+            "1,2,3",
+            "NaN,0",
+            "9\u{661}N020W",
+        ] {
             assert!(place(text).is_err(), "{text}");
         }
     }

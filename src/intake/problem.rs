@@ -147,7 +147,9 @@ impl Problem {
         let text = match self {
             Self::UnknownAerodrome(unknown) => return unknown_place_hint(unknown),
             Self::Coordinates(_) => "write 7830N02000W, 78N020W or 78.5,-20",
-            Self::Instant(_) | Self::NoOffset(_) => "write 2026-12-18T05:10Z, or 2026-12-18T00:10-05:00 with an offset",
+            Self::Instant(_) | Self::NoOffset(_) => {
+                "write 2026-12-18T05:10Z, or 2026-12-18T00:10-05:00 with an offset"
+            }
             Self::Duration(_) => "write 14h55m, 14h or 55m",
             Self::NotText(_) => "a flight file is TOML in UTF-8; save it as UTF-8 without a byte-order mark",
             Self::Empty => "a flight file needs at least from, to, takeoff, and airborne or landing",

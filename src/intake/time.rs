@@ -8,7 +8,8 @@ use chrono::{DateTime, FixedOffset, NaiveDateTime, Utc};
 pub(super) fn instant(text: &str) -> Result<Instant, Problem> {
     let text = text.trim();
     let full = with_seconds(text);
-    let parsed: DateTime<FixedOffset> = DateTime::parse_from_rfc3339(&full).map_err(|_| not_an_instant(text))?;
+    let parsed: DateTime<FixedOffset> =
+        DateTime::parse_from_rfc3339(&full).map_err(|_| not_an_instant(text))?;
     let instant = Instant::from_utc(parsed.with_timezone(&Utc));
     if instant.is_answered_for() { Ok(instant) } else { Err(Problem::Years { given: text.to_string() }) }
 }
@@ -63,7 +64,9 @@ mod tests {
     #[test]
     fn one_instant_has_many_spellings() {
         let wanted = instant("2026-12-18T05:10:00Z").unwrap();
-        for text in ["2026-12-18T05:10Z", "2026-12-18 05:10Z", "2026-12-18T00:10-05:00", "2026-12-18T05:10:00.000z"] {
+        for text in
+            ["2026-12-18T05:10Z", "2026-12-18 05:10Z", "2026-12-18T00:10-05:00", "2026-12-18T05:10:00.000z"]
+        {
             assert_eq!(instant(text).unwrap(), wanted, "{text}");
         }
     }
@@ -79,7 +82,13 @@ mod tests {
 
     #[test]
     fn durations_are_hours_then_minutes_then_seconds() {
-        for (text, seconds) in [("14h55m", 53_700.0), ("14h", 50_400.0), ("55m", 3300.0), ("1h0m30s", 3630.0), ("PT14H55M", 53_700.0)] {
+        for (text, seconds) in [
+            ("14h55m", 53_700.0),
+            ("14h", 50_400.0),
+            ("55m", 3300.0),
+            ("1h0m30s", 3630.0),
+            ("PT14H55M", 53_700.0),
+        ] {
             assert_eq!(duration_s(text).unwrap(), seconds, "{text}");
         }
         for text in ["", "PT", "14", "14:55", "55m14h", "-2h", "1.5h", "999999999h", "h"] {

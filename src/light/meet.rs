@@ -75,7 +75,8 @@ pub(super) fn meetings(trace: &Trace, limit: Limit, crossings: &mut Vec<Crossing
 fn touch(run: &[Peak], limit: Limit, level: f64) -> Option<Touch> {
     let inner = run.get(1..run.len() - 1)?;
     let from_above = run[0].sine >= level;
-    let deepest = |a: &&Peak, b: &&Peak| if from_above { a.sine.total_cmp(&b.sine) } else { b.sine.total_cmp(&a.sine) };
+    let deepest =
+        |a: &&Peak, b: &&Peak| if from_above { a.sine.total_cmp(&b.sine) } else { b.sine.total_cmp(&a.sine) };
     let peak = inner.iter().min_by(deepest)?;
     let margin = Angle::from_rad((peak.sine - level) / limit.elevation().rad().cos());
     Some(Touch { at_s: peak.at_s, limit, margin })

@@ -64,10 +64,8 @@ impl Trace {
 
 /// Appends the curves of a leg: one, or those of its halves where one polynomial would need too many nodes.
 fn fit(leg: &Leg, window: &SunWindow<'_>, span: (f64, f64), curves: &mut Vec<Curve>) {
-    let band = Bandwidth {
-        body_rad_s: TRUE_SUN * MEAN_SUN_RAD_S,
-        path_rad_s: leg.speed_m_s() / wgs84::R_MIN_M,
-    };
+    let band =
+        Bandwidth { body_rad_s: TRUE_SUN * MEAN_SUN_RAD_S, path_rad_s: leg.speed_m_s() / wgs84::R_MIN_M };
     let sine = |t: f64| sine_of_elevation(leg.normal(t), &window.at(t));
     if let Some(curve) = Curve::through(span.0, span.1, band, sine) {
         curves.push(curve);

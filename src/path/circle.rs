@@ -63,7 +63,10 @@ pub struct CircleCrossing {
 
 /// All watched circles for an obliquity and a choice of polar limits.
 fn watched(true_obliquity: Angle, limits: PolarLimits) -> [Circle; 7] {
-    use CircleName::{AntarcticCircle, ArcticCircle, Equator, NorthPolarArea, SouthPolarArea, TropicOfCancer, TropicOfCapricorn};
+    use CircleName::{
+        AntarcticCircle, ArcticCircle, Equator, NorthPolarArea, SouthPolarArea, TropicOfCancer,
+        TropicOfCapricorn,
+    };
     let polar = Angle::from_deg(90.0) - true_obliquity;
     let at = |name, latitude| Circle { name, latitude: Some(latitude) };
     [

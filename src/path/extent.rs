@@ -26,10 +26,10 @@ impl Path {
     fn farthest(&self, measure: impl Fn(Place) -> f64) -> Passed {
         let start = Passed { at_s: 0.0, place: self.legs()[0].from };
         let points = self.legs().iter().flat_map(|leg| {
-            let vertices = leg.line().vertices().map(|d| Passed {
-                at_s: leg.time_s(d),
-                place: Place::from_normal(leg.line().normal(d)),
-            });
+            let vertices = leg
+                .line()
+                .vertices()
+                .map(|d| Passed { at_s: leg.time_s(d), place: Place::from_normal(leg.line().normal(d)) });
             vertices.chain(std::iter::once(Passed { at_s: leg.end_s, place: leg.to })).collect::<Vec<_>>()
         });
         points.fold(start, |best, p| if measure(p.place) > measure(best.place) { p } else { best })

@@ -14,7 +14,9 @@ const KNOT_M_S: f64 = 1852.0 / 3600.0;
 #[derive(Debug, Clone, PartialEq, thiserror::Error)]
 pub enum FlightError {
     /// It goes nowhere.
-    #[error("the flight from {from} to {to} has no length: both are the same place and no waypoint lies between")]
+    #[error(
+        "the flight from {from} to {to} has no length: both are the same place and no waypoint lies between"
+    )]
     NoLength {
         /// Where it begins.
         from: String,
@@ -126,7 +128,8 @@ fn stretch(fixes: &[Fix<'_>], legs: &mut Vec<Leg>) -> Result<(), FlightError> {
     for (i, (line, pair)) in lines.into_iter().zip(fixes.windows(2)).enumerate() {
         flown_m += line.length_m();
         // the stretch ends exactly at its given time, whatever the sums round to
-        let to_s = if i + 1 == count { end_s } else { begin_s + time_share(flown_m, length_m) * (end_s - begin_s) };
+        let to_s =
+            if i + 1 == count { end_s } else { begin_s + time_share(flown_m, length_m) * (end_s - begin_s) };
         if to_s > from_s {
             legs.push(Leg::new(pair[0].place, pair[1].place, line, (from_s, to_s)));
             from_s = to_s;
@@ -170,7 +173,12 @@ impl Path {
     /// The position so many seconds after take-off, which must lie between take-off and landing.
     pub fn at(&self, seconds: f64) -> Position {
         let point = self.leg_at(seconds).at(seconds);
-        Position { place: Place::from_normal(point.normal), normal: point.normal, track: point.track, height: self.height }
+        Position {
+            place: Place::from_normal(point.normal),
+            normal: point.normal,
+            track: point.track,
+            height: self.height,
+        }
     }
 }
 

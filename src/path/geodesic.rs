@@ -264,7 +264,12 @@ mod tests {
 
     #[test]
     fn a_line_ends_where_it_should() {
-        let ends = [((43.68, -79.63), (22.31, 113.92)), ((90.0, 0.0), (-45.0, 170.0)), ((0.0, 10.0), (0.0, 80.0)), ((65.0, 30.0), (65.0, -150.0))];
+        let ends = [
+            ((43.68, -79.63), (22.31, 113.92)),
+            ((90.0, 0.0), (-45.0, 170.0)),
+            ((0.0, 10.0), (0.0, 80.0)),
+            ((65.0, 30.0), (65.0, -150.0)),
+        ];
         for ((a, b), (c, d)) in ends {
             let (from, to) = (Place::from_deg(a, b).unwrap(), Place::from_deg(c, d).unwrap());
             let line = Line::between(from, to);

@@ -28,7 +28,8 @@ impl Sky {
         let tt = time::tt_days(instant);
         let sun = self.sun_at(instant);
         let [x, y, _] = model::apparent(tt).direction;
-        let right_ascension = Angle::from_rad(y.atan2(x) - model::equation_of_origins_rad(tt)).turned_positive();
+        let right_ascension =
+            Angle::from_rad(y.atan2(x) - model::equation_of_origins_rad(tt)).turned_positive();
         Almanac {
             sun,
             right_ascension,

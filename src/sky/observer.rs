@@ -7,11 +7,15 @@ use crate::units::{Angle, Place, Vector, dot, wgs84};
 #[derive(Debug, Clone, Copy, PartialEq, PartialOrd)]
 pub struct GeometricElevation(pub Angle);
 
+/// The Earth's rate of rotation over the speed of light, per astronomical unit: 7.292115e−5 rad/s (IERS Conventions
+/// 2010, table 1.2) × 499.004784 s.
+const SPIN_PER_AU: f64 = 7.292_115e-5 * 499.004_784;
+
 /// The sine of the Sun's geometric elevation at the foot of an ellipsoid normal.
 ///
 /// # Shapes and units
-/// `normal` is the outward unit normal, Earth-fixed. The observer stands on the ellipsoid; the parallax (up to 8.9″) is
-/// exact and not a series.
+/// `normal` is the outward unit normal, Earth-fixed. The observer stands on the ellipsoid and turns with the Earth: the
+/// parallax (up to 8.9″) is exact and not a series, the diurnal aberration (up to 0.32″) is of first order.
 ///
 /// # Source
 /// The place under a normal is N (n_x, n_y, (1 − e²) n_z) with N = a / √(1 − e² n_z²) (any text on geodesy, e.g.
@@ -26,16 +30,18 @@ pub fn sine_of_elevation(normal: Vector, sun: &SunPlace) -> f64 {
     let d = sun.distance_au;
     let towards_sun = dot(place, sun.direction);
     let range = (d * (d - 2.0 * towards_sun) + dot(place, place)).sqrt();
+    // the observer moves eastward, level, so that aberration draws the direction along without lifting it: the sine
+    // shrinks as the vector is brought back to unit length
+    let eastward = SPIN_PER_AU * (place[0] * sun.direction[1] - place[1] * sun.direction[0]);
     // n·P is N (1 − e² n_z²), the distance of the tangent plane from the centre
-    (d * dot(normal, sun.direction) - radius_au * w * w) / range
+    (d * dot(normal, sun.direction) - radius_au * w * w) / range * (1.0 - eastward)
 }
 
 /// The Sun's geometric elevation at a place.
 pub fn elevation(place: Place, sun: &SunPlace) -> GeometricElevation {
-    let sine = sine_of_elevation(place.normal(), sun);
-    let [east, north, _] = horizontal(place, sun);
-    // near the zenith the sine is flat, so the horizontal part decides
-    GeometricElevation(Angle::from_rad(sine.atan2(east.hypot(north))))
+    let [east, north, up] = horizontal(place, sun);
+    // not by the sine alone, which is flat near the zenith
+    GeometricElevation(Angle::from_rad(up.atan2(east.hypot(north))))
 }
 
 /// The Sun's azimuth at a place, from true north through east, 0° to 360°.
@@ -46,7 +52,7 @@ pub fn azimuth(place: Place, sun: &SunPlace) -> Angle {
     Angle::from_rad(east.atan2(north)).turned_positive()
 }
 
-/// The topocentric unit direction's east, north and upward parts.
+/// The topocentric direction's east, north and upward parts; its length is 1 but for the aberration.
 fn horizontal(place: Place, sun: &SunPlace) -> Vector {
     let (sin_lat, cos_lat) = place.lat.angle().rad().sin_cos();
     let (sin_lon, cos_lon) = place.lon.angle().rad().sin_cos();
@@ -58,10 +64,12 @@ fn horizontal(place: Place, sun: &SunPlace) -> Vector {
     ];
     let line: Vector = std::array::from_fn(|i| sun.distance_au * sun.direction[i] - under[i]);
     let range = dot(line, line).sqrt();
+    let spin = [-SPIN_PER_AU * under[1], SPIN_PER_AU * under[0], 0.0];
+    let seen: Vector = std::array::from_fn(|i| line[i] / range + spin[i]);
     let axes = [
         [-sin_lon, cos_lon, 0.0],
         [-sin_lat * cos_lon, -sin_lat * sin_lon, cos_lat],
         [cos_lat * cos_lon, cos_lat * sin_lon, sin_lat],
     ];
-    axes.map(|axis| dot(axis, line) / range)
+    axes.map(|axis| dot(axis, seen))
 }

@@ -46,14 +46,16 @@ pub fn year_moments(year: i32) -> Vec<YearMoment> {
 }
 
 fn new_year(year: i32) -> Instant {
-    let midnight = NaiveDate::from_ymd_opt(year, 1, 1).and_then(|d| d.and_hms_opt(0, 0, 0)).unwrap_or_default();
+    let midnight =
+        NaiveDate::from_ymd_opt(year, 1, 1).and_then(|d| d.and_hms_opt(0, 0, 0)).unwrap_or_default();
     Instant::from_utc(DateTime::<Utc>::from_naive_utc_and_offset(midnight, Utc))
 }
 
 /// The longitudes that are multiples of 90°: each is passed once, about a quarter of a year after the last.
 fn seasons(begin: Instant, end: Instant) -> Vec<YearMoment> {
     use YearEvent::{DecemberSolstice, JuneSolstice, MarchEquinox, SeptemberEquinox};
-    let wanted = [(MarchEquinox, 79.0), (JuneSolstice, 171.5), (SeptemberEquinox, 265.0), (DecemberSolstice, 355.0)];
+    let wanted =
+        [(MarchEquinox, 79.0), (JuneSolstice, 171.5), (SeptemberEquinox, 265.0), (DecemberSolstice, 355.0)];
     let moments = wanted.iter().zip(0_u8..).map(|(&(event, day), quarter)| {
         let target = Angle::from_deg(90.0 * f64::from(quarter));
         let ahead = |t: Instant| {
@@ -129,7 +131,14 @@ mod tests {
         assert_eq!(moments.len(), 6, "{dates:?}");
         assert_eq!(moments[0].event, YearEvent::Perihelion);
         // Astronomical Almanac for 2026 (from memory): 3 Jan, 20 Mar 14:46, 21 Jun 08:24, 6 Jul, 23 Sep 00:05, 21 Dec 20:50
-        for (date, begins) in dates.iter().zip(["2026-01-03T17", "2026-03-20T14:4", "2026-06-21T08:2", "2026-07-06T1", "2026-09-23T00:0", "2026-12-21T20:"]) {
+        for (date, begins) in dates.iter().zip([
+            "2026-01-03T17",
+            "2026-03-20T14:4",
+            "2026-06-21T08:2",
+            "2026-07-06T1",
+            "2026-09-23T00:0",
+            "2026-12-21T20:",
+        ]) {
             assert!(date.starts_with(begins), "{date} is not {begins}");
         }
     }

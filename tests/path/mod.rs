@@ -1,0 +1,4 @@
+//! Geodesics, circles and positions.
+
+mod geodesics;
+mod circles;

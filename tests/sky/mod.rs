@@ -1,0 +1,5 @@
+//! The Sun's place.
+
+mod places;
+mod seasons;
+mod handbooks;
