@@ -1,4 +1,6 @@
 //! What light a flight meets: daylight, twilight and darkness along a long-haul or polar route.
+//!
+//! The rooms stand in walking order: each imports only from those above it.
 
 pub mod units;
 pub mod curve;
@@ -7,3 +9,9 @@ pub mod intake;
 pub mod path;
 pub mod sky;
 pub mod light;
+mod brief;
+mod sun_brief;
+pub mod reports;
+
+pub use brief::{Brief, brief};
+pub use sun_brief::{PlaceDay, SunBrief, sun_brief};

@@ -1,3 +1,9 @@
-//! The command line of gloamline.
+//! The command line of gloamline: arguments in, a brief out, and an exit code that tells how it went.
 
-fn main() {}
+mod cli;
+
+use std::process::ExitCode;
+
+fn main() -> ExitCode {
+    cli::run()
+}

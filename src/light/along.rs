@@ -54,3 +54,11 @@ pub fn along(path: &Path, sky: &Sky) -> Light {
         segments,
     }
 }
+
+impl Light {
+    /// The state that holds from an instant on, in seconds from take-off; at landing and after, the last.
+    pub fn state_at(&self, at_s: f64) -> State {
+        let next = self.segments.partition_point(|segment| segment.end_s <= at_s);
+        self.segments.get(next).map_or(self.at_landing, |segment| segment.state)
+    }
+}

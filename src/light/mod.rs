@@ -12,9 +12,11 @@ mod trace;
 mod meet;
 mod segment;
 mod along;
+mod sample;
 
 pub use along::{Light, along};
 pub use limit::{Direction, Event, Limit, State};
 pub use meet::{Crossing, TOUCH, Touch};
+pub use sample::{Lookout, Sample};
 pub use segment::{Segment, StateSeconds};
 pub use trace::{Peak, Trace};

@@ -1,0 +1,118 @@
+//! What can be asked for, as typed arguments.
+
+use clap::{Args, Parser, Subcommand, ValueEnum};
+use std::path::PathBuf;
+
+/// The light a flight meets: daylight, twilight and darkness along its route.
+#[derive(Debug, Parser)]
+#[command(name = "gloamline", version, about, max_term_width = 100)]
+pub(super) struct Arguments {
+    #[command(subcommand)]
+    pub(super) command: Command,
+}
+
+#[derive(Debug, Subcommand)]
+pub(super) enum Command {
+    /// Brief flights: states, sunrises and sunsets, twilights and circles along the route
+    Brief(BriefRequest),
+    /// The Sun's almanac quantities at an instant, a place's day, or a year's equinoxes and solstices
+    Sun(SunRequest),
+}
+
+/// The form of what goes to standard output.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, ValueEnum)]
+pub(super) enum Form {
+    /// For people
+    Text,
+    /// For machines: one object, or an array of several
+    Json,
+    /// One row a minute
+    Csv,
+}
+
+#[derive(Debug, Args)]
+#[command(after_help = "Times are RFC 3339 with an offset or Z; the seconds may be left out.\n\
+    Exit codes: 0 all done, 1 some flights refused, 2 nothing done.")]
+pub(super) struct BriefRequest {
+    /// Flight files (TOML); - reads one from standard input
+    #[arg(value_name = "FLIGHT.toml", required_unless_present = "from")]
+    pub(super) files: Vec<PathBuf>,
+
+    #[command(flatten)]
+    pub(super) inline: InlineRequest,
+
+    /// What goes to standard output
+    #[arg(long = "as", value_enum, default_value_t = Form::Text, value_name = "FORM")]
+    pub(super) form: Form,
+
+    /// Write NAME.txt, .json, .csv, .png and .svg for each flight into this folder
+    #[arg(long, value_name = "DIR")]
+    pub(super) out: Option<PathBuf>,
+
+    /// UT1 − UTC in seconds, for flight files that do not give it
+    #[arg(long, value_name = "SECONDS", default_value_t = 0.0, allow_hyphen_values = true)]
+    pub(super) dut1_s: f64,
+
+    /// Latitude in degrees north at which the North Polar Area begins [default: 78]
+    #[arg(long, value_name = "DEGREES")]
+    pub(super) north_polar_area: Option<f64>,
+
+    /// Latitude in degrees south at which the South Polar Area begins [default: 60]
+    #[arg(long, value_name = "DEGREES")]
+    pub(super) south_polar_area: Option<f64>,
+}
+
+#[derive(Debug, Args)]
+#[command(next_help_heading = "A flight without a file")]
+pub(super) struct InlineRequest {
+    /// Aerodrome code or coordinates of the take-off: CYYZ, YYZ, 7830N02000W or 43.68,-79.63
+    #[arg(long, value_name = "PLACE", requires_all = ["to", "takeoff"], conflicts_with = "files", allow_hyphen_values = true)]
+    pub(super) from: Option<String>,
+
+    /// Aerodrome code or coordinates of the landing
+    #[arg(long, value_name = "PLACE", requires = "from", allow_hyphen_values = true)]
+    pub(super) to: Option<String>,
+
+    /// Take-off time, such as 2026-12-18T05:10Z
+    #[arg(long, value_name = "TIME", requires = "from")]
+    pub(super) takeoff: Option<String>,
+
+    /// Time in the air, such as 14h55m
+    #[arg(long, value_name = "DURATION", requires = "from")]
+    pub(super) airborne: Option<String>,
+
+    /// Landing time, instead of the time in the air
+    #[arg(long, value_name = "TIME", requires = "from")]
+    pub(super) landing: Option<String>,
+
+    /// Cruise height in feet
+    #[arg(long, value_name = "FEET", requires = "from", allow_hyphen_values = true)]
+    pub(super) level_ft: Option<f64>,
+
+    /// What the flight is called
+    #[arg(long, value_name = "NAME", requires = "from")]
+    pub(super) name: Option<String>,
+}
+
+#[derive(Debug, Args)]
+pub(super) struct SunRequest {
+    /// The instant, such as 2026-12-18T05:10Z
+    #[arg(required_unless_present = "year")]
+    pub(super) time: Option<String>,
+
+    /// A place whose day is wanted: aerodrome code or coordinates
+    #[arg(allow_hyphen_values = true, requires = "time")]
+    pub(super) place: Option<String>,
+
+    /// List this year's equinoxes, solstices, perihelion and aphelion
+    #[arg(long, value_name = "YEAR", conflicts_with = "time", allow_hyphen_values = true)]
+    pub(super) year: Option<i32>,
+
+    /// What goes to standard output: text or json
+    #[arg(long = "as", value_parser = ["text", "json"], default_value = "text", value_name = "FORM")]
+    pub(super) form: String,
+
+    /// UT1 − UTC in seconds
+    #[arg(long, value_name = "SECONDS", default_value_t = 0.0, allow_hyphen_values = true)]
+    pub(super) dut1_s: f64,
+}

@@ -1,0 +1,78 @@
+//! The only place that opens and writes files.
+
+use std::io::{Read, Write};
+use std::path::{Path, PathBuf};
+use tempfile::NamedTempFile;
+
+/// No flight file is longer than this; a longer one is something else.
+const LONGEST_INPUT: u64 = 16 << 20;
+
+/// A file that cannot be read or written.
+#[derive(Debug, thiserror::Error)]
+pub(super) enum FileError {
+    #[error("{}: cannot be read: {source}", .path.display())]
+    Read { path: PathBuf, source: std::io::Error },
+    #[error("{}: longer than {} MB, which no flight file is", .path.display(), LONGEST_INPUT >> 20)]
+    TooLong { path: PathBuf },
+    #[error("{}: cannot be written: {source}", .path.display())]
+    Write { path: PathBuf, source: std::io::Error },
+}
+
+/// All bytes of a file, or of standard input for `-`.
+pub(super) fn read(path: &Path) -> Result<Vec<u8>, FileError> {
+    let fail = |source| FileError::Read { path: path.to_path_buf(), source };
+    let mut bytes = Vec::new();
+    let limit = LONGEST_INPUT + 1;
+    if path == Path::new("-") {
+        std::io::stdin().lock().take(limit).read_to_end(&mut bytes).map_err(fail)?;
+    } else {
+        std::fs::File::open(path).map_err(fail)?.take(limit).read_to_end(&mut bytes).map_err(fail)?;
+    }
+    if bytes.len() as u64 > LONGEST_INPUT {
+        Err(FileError::TooLong { path: path.to_path_buf() })
+    } else {
+        Ok(bytes)
+    }
+}
+
+/// Files that appear together and whole, or not at all: each is written under a temporary name beside its final one,
+/// and only when all are complete do they take their names.
+pub(super) struct Batch<'a> {
+    folder: &'a Path,
+    written: Vec<(NamedTempFile, PathBuf)>,
+}
+
+impl<'a> Batch<'a> {
+    /// A batch for a folder, which is made if it is missing.
+    pub(super) fn new(folder: &'a Path) -> Result<Self, FileError> {
+        std::fs::create_dir_all(folder)
+            .map_err(|source| FileError::Write { path: folder.to_path_buf(), source })?;
+        Ok(Self { folder, written: Vec::new() })
+    }
+
+    /// Adds a file.
+    pub(super) fn add(&mut self, name: &str, bytes: &[u8]) -> Result<(), FileError> {
+        let path = self.folder.join(name);
+        let fail = |source| FileError::Write { path: path.clone(), source };
+        let mut builder = tempfile::Builder::new();
+        #[cfg(unix)]
+        {
+            use std::os::unix::fs::PermissionsExt;
+            // as any new file: the process's mask takes away what it should
+            builder.permissions(std::fs::Permissions::from_mode(0o666));
+        }
+        let mut file = builder.prefix(".gloamline-").tempfile_in(self.folder).map_err(fail)?;
+        file.write_all(bytes).and_then(|()| file.as_file().sync_all()).map_err(fail)?;
+        self.written.push((file, path));
+        Ok(())
+    }
+
+    /// Gives all files their names.
+    pub(super) fn finish(self) -> Result<Vec<PathBuf>, FileError> {
+        let named = self.written.into_iter().map(|(file, path)| {
+            file.persist(&path).map_err(|e| FileError::Write { path: path.clone(), source: e.error })?;
+            Ok(path)
+        });
+        named.collect()
+    }
+}

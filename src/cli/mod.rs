@@ -1,0 +1,39 @@
+//! Arguments, files and the terminal: everything that touches the outside.
+
+mod arguments;
+mod brief;
+mod files;
+mod sun;
+mod terminal;
+
+use arguments::{Arguments, Command};
+use clap::Parser;
+use std::process::ExitCode;
+
+/// How a command ended; each has its exit code.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+enum Outcome {
+    /// All was done.
+    Done,
+    /// Some inputs were refused, the rest was done.
+    SomeRefused,
+    /// Nothing could be done.
+    Failed,
+}
+
+/// Runs what the arguments ask for.
+pub(crate) fn run() -> ExitCode {
+    let arguments = match Arguments::try_parse() {
+        Ok(arguments) => arguments,
+        Err(error) => return terminal::usage(&error),
+    };
+    let outcome = match arguments.command {
+        Command::Brief(request) => brief::run(&request),
+        Command::Sun(request) => sun::run(&request),
+    };
+    ExitCode::from(match outcome {
+        Outcome::Done => 0,
+        Outcome::SomeRefused => 1,
+        Outcome::Failed => 2,
+    })
+}

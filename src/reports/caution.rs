@@ -1,0 +1,30 @@
+//! What every brief says about itself: how far it can be trusted and whom it defers to.
+
+use crate::Brief;
+
+/// The cautions of a brief, one sentence each.
+pub(super) fn cautions(brief: &Brief) -> Vec<String> {
+    let mut cautions = general();
+    cautions.push(format!(
+        "UT1 − UTC is taken as {} s; it may be up to 0.9 s either way, which moves a time by as much and by more where \
+         the Sun moves slowly along the path.",
+        brief.dut1_s
+    ));
+    if brief.flight.waypoints.is_empty() {
+        cautions.push("Positions are those of the shortest path at a constant ground speed.".to_string());
+    }
+    cautions
+}
+
+/// The cautions that hold for any time computed here.
+pub(super) fn general() -> Vec<String> {
+    [
+        "Computed light, not a judgement: it does not say that a crew is fit or an operation lawful. The operator's \
+         manual, the authority and its published tables decide.",
+        "Times are for a clear sea-level horizon beneath the aircraft with the almanacs' refraction (Sun's centre 50′ \
+         below it at sunrise and sunset); terrain, cloud and weather move them, and refraction alone scatters sunrise \
+         and sunset by a minute or more, by many minutes at high latitudes.",
+    ]
+    .map(str::to_string)
+    .to_vec()
+}

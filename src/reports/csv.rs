@@ -1,0 +1,84 @@
+//! A brief's minutes as CSV: one row each, RFC 4180 with a header.
+
+use super::clock::machine;
+use super::words::state_key;
+use crate::Brief;
+use crate::light::Sample;
+
+const HEADER: [&str; 12] = [
+    "flight",
+    "time_utc",
+    "lat_deg",
+    "lon_deg",
+    "height_m",
+    "track_deg",
+    "elevation_deg",
+    "azimuth_deg",
+    "relative_bearing_deg",
+    "declination_deg",
+    "gha_deg",
+    "state",
+];
+
+/// The minutes of each brief, one after another under one header.
+///
+/// # Errors
+/// None that a brief can cause: the text is built in memory.
+pub fn csv(briefs: &[Brief]) -> Result<String, csv::Error> {
+    let mut writer = csv::Writer::from_writer(Vec::new());
+    writer.write_record(HEADER)?;
+    for brief in briefs {
+        let name = no_formula(&super::one_line(&brief.flight.name));
+        for sample in &brief.minutes {
+            writer.write_record(row(&name, brief, sample))?;
+        }
+    }
+    let bytes = writer.into_inner().map_err(csv::IntoInnerError::into_error)?;
+    Ok(String::from_utf8_lossy(&bytes).into_owned())
+}
+
+fn row(name: &str, brief: &Brief, sample: &Sample) -> [String; 12] {
+    let place = sample.position.place;
+    [
+        name.to_string(),
+        machine(brief.path.takeoff.after_s(sample.at_s)),
+        fixed(place.lat.deg(), 5),
+        fixed(place.lon.deg(), 5),
+        sample.position.height.map_or(String::new(), |height| fixed(height.0, 1)),
+        fixed(sample.position.track.deg(), 3),
+        fixed(sample.elevation.0.deg(), 5),
+        fixed(sample.azimuth.deg(), 3),
+        fixed(sample.relative_bearing.deg(), 3),
+        fixed(sample.declination.deg(), 5),
+        fixed(sample.gha.deg(), 5),
+        state_key(sample.state).to_string(),
+    ]
+}
+
+/// A number with so many decimals and no negative zero.
+fn fixed(value: f64, decimals: usize) -> String {
+    let text = format!("{value:.decimals$}");
+    if text.starts_with('-') && text.bytes().all(|b| matches!(b, b'-' | b'0' | b'.')) {
+        text[1..].to_string()
+    } else {
+        text
+    }
+}
+
+/// A text that no spreadsheet takes for a formula: an apostrophe goes before the characters that begin one.
+fn no_formula(text: &str) -> String {
+    if text.starts_with(['=', '+', '-', '@']) { format!("'{text}") } else { text.to_string() }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::{fixed, no_formula};
+
+    #[test]
+    fn no_value_is_a_formula_or_a_negative_zero() {
+        assert_eq!(no_formula("=1+1"), "'=1+1");
+        assert_eq!(no_formula("Varde 71"), "Varde 71");
+        assert_eq!(fixed(-0.000_001, 3), "0.000");
+        assert_eq!(fixed(-1.5, 1), "-1.5");
+    }
+}

@@ -1,0 +1,22 @@
+//! A brief as text, JSON or CSV: bytes and strings for somebody else to write.
+//!
+//! Computes no angle and opens no file.
+
+mod words;
+mod clean;
+mod clock;
+mod record;
+mod json;
+mod csv;
+mod text;
+mod table;
+mod caution;
+mod sun;
+mod name;
+
+pub use clean::one_line;
+pub use csv::csv;
+pub use json::{json, json_list};
+pub use name::file_stem;
+pub use sun::{SunReport, sun_json, sun_text, year_json, year_text};
+pub use text::text;

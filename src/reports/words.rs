@@ -1,0 +1,90 @@
+//! The words that states, events and circles go by, for machines and for people.
+
+use crate::light::{Direction, Event, Limit, State};
+use crate::path::{CircleName, Heading};
+
+/// A state's key in JSON and CSV.
+pub(super) fn state_key(state: State) -> &'static str {
+    match state {
+        State::Daylight => "daylight",
+        State::CivilTwilight => "civil_twilight",
+        State::NauticalTwilight => "nautical_twilight",
+        State::AstronomicalTwilight => "astronomical_twilight",
+        State::Darkness => "darkness",
+    }
+}
+
+/// A limit's key.
+pub(super) fn limit_key(limit: Limit) -> &'static str {
+    match limit {
+        Limit::Horizon => "horizon",
+        Limit::Civil => "civil",
+        Limit::Nautical => "nautical",
+        Limit::Astronomical => "astronomical",
+    }
+}
+
+/// A direction's key.
+pub(super) fn direction_key(direction: Direction) -> &'static str {
+    match direction {
+        Direction::Rising => "rising",
+        Direction::Setting => "setting",
+    }
+}
+
+/// An event's key.
+pub(super) fn event_key(event: Event) -> &'static str {
+    match event {
+        Event::Sunrise => "sunrise",
+        Event::Sunset => "sunset",
+        Event::CivilDawn => "civil_dawn",
+        Event::CivilDusk => "civil_dusk",
+        Event::NauticalDawn => "nautical_dawn",
+        Event::NauticalDusk => "nautical_dusk",
+        Event::AstronomicalDawn => "astronomical_dawn",
+        Event::AstronomicalDusk => "astronomical_dusk",
+    }
+}
+
+/// A circle's key.
+pub(super) fn circle_key(circle: CircleName) -> &'static str {
+    match circle {
+        CircleName::ArcticCircle => "arctic_circle",
+        CircleName::AntarcticCircle => "antarctic_circle",
+        CircleName::NorthPolarArea => "north_polar_area",
+        CircleName::SouthPolarArea => "south_polar_area",
+        CircleName::TropicOfCancer => "tropic_of_cancer",
+        CircleName::TropicOfCapricorn => "tropic_of_capricorn",
+        CircleName::Equator => "equator",
+        CircleName::Meridian180 => "meridian_180",
+    }
+}
+
+/// A circle's name for people.
+pub(super) fn circle_name(circle: CircleName) -> &'static str {
+    match circle {
+        CircleName::ArcticCircle => "Arctic Circle",
+        CircleName::AntarcticCircle => "Antarctic Circle",
+        CircleName::NorthPolarArea => "North Polar Area",
+        CircleName::SouthPolarArea => "South Polar Area",
+        CircleName::TropicOfCancer => "Tropic of Cancer",
+        CircleName::TropicOfCapricorn => "Tropic of Capricorn",
+        CircleName::Equator => "Equator",
+        CircleName::Meridian180 => "180° meridian",
+    }
+}
+
+/// A heading's key.
+pub(super) fn heading_key(heading: Heading) -> &'static str {
+    match heading {
+        Heading::Northbound => "northbound",
+        Heading::Southbound => "southbound",
+        Heading::Eastbound => "eastbound",
+        Heading::Westbound => "westbound",
+    }
+}
+
+/// A key as people read it: words parted by spaces.
+pub(super) fn spoken(key: &str) -> String {
+    key.replace('_', " ")
+}
