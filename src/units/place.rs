@@ -27,7 +27,11 @@ impl Latitude {
     /// # Errors
     /// Outside −90° to 90°, or not a number.
     pub fn from_deg(deg: f64) -> Result<Self, PlaceError> {
-        if (-90.0..=90.0).contains(&deg) { Ok(Self(Angle::from_deg(deg))) } else { Err(PlaceError::Latitude(deg)) }
+        if (-90.0..=90.0).contains(&deg) {
+            Ok(Self(Angle::from_deg(deg)))
+        } else {
+            Err(PlaceError::Latitude(deg))
+        }
     }
 
     /// Degrees north.
