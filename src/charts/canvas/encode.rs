@@ -5,7 +5,7 @@
 use super::CanvasError;
 use super::scene::Canvas;
 use super::text::visible;
-use png::{BitDepth, ColorType, Compression, Encoder, Filter, PixelDimensions, Unit};
+use png::{BitDepth, ColorType, DeflateCompression, Encoder, Filter, PixelDimensions, Unit};
 
 /// Canvas pixels are those of style sheets, 96 to the inch.
 const PIXELS_PER_METRE: f64 = 96.0 / 0.0254;
@@ -27,8 +27,9 @@ impl Canvas {
         let mut encoder = Encoder::new(&mut file, width, height);
         encoder.set_color(if opaque { ColorType::Rgb } else { ColorType::Rgba });
         encoder.set_depth(BitDepth::Eight);
-        encoder.set_compression(Compression::Balanced);
-        encoder.set_filter(Filter::Adaptive);
+        // measured on charts: no filter gives the smallest files, and higher levels 5 % less for twice the time
+        encoder.set_deflate_compression(DeflateCompression::Level(3));
+        encoder.set_filter(Filter::NoFilter);
         let per_metre = (PIXELS_PER_METRE * scale).round() as u32;
         encoder.set_pixel_dims(Some(PixelDimensions { xppu: per_metre, yppu: per_metre, unit: Unit::Meter }));
         for (keyword, text) in [("Title", &self.title), ("Description", &self.description)] {

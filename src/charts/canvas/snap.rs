@@ -19,7 +19,8 @@ pub(super) fn centres(shape: &Shape, width: f64, scale: f64) -> Shape {
         return scaled;
     }
     let odd = (width * scale).round().max(1.0) % 2.0 == 1.0;
-    let centre = |v: f64| if odd { v.floor() + 0.5 } else { v.round() };
+    // `plotters` puts an axis one grid step beside the mesh line at the same value: rounded this way they fall together
+    let centre = |v: f64| if odd { v.ceil() - 0.5 } else { v.round() };
     match &scaled {
         // the ends of a lone line keep their fractions
         Shape::Lines { lines, square: false } => {
@@ -80,6 +81,12 @@ mod tests {
             centres(&lines(&[(1.3, 7.2), (90.0, 7.2)]), 1.0, 2.0),
             lines(&[(2.6, 14.0), (180.0, 14.0)])
         );
+    }
+
+    #[test]
+    fn an_axis_falls_on_the_mesh_line_beside_it() {
+        let level = |y: f64| centres(&lines(&[(0.0, y), (9.0, y)]), 1.0, 1.0);
+        assert_eq!(level(94.875), level(95.0));
     }
 
     #[test]
