@@ -109,7 +109,10 @@ impl Face {
     /// The glyph for a character: of this face, else of the fallback, else an empty box.
     pub(super) fn glyph(self, character: char) -> Glyph {
         let fallback = self.fallback();
-        self.find(character)
+        // B612 has but some of the triangles, and a Moon so small that it reads as a c
+        let first = if ('\u{25a0}'..='\u{27bf}').contains(&character) { fallback } else { self };
+        first
+            .find(character)
             .or_else(|| fallback.find(character))
             .or_else(|| fallback.find('\u{25a1}'))
             .unwrap_or(Glyph { face: fallback, id: 0 })
