@@ -11,6 +11,7 @@ pub mod sky;
 pub mod light;
 mod brief;
 mod sun_brief;
+pub mod charts;
 pub mod reports;
 
 pub use brief::{Brief, brief};

@@ -5,3 +5,4 @@ mod places;
 mod sky;
 mod path;
 mod light;
+mod charts;

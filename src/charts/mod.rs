@@ -1,0 +1,5 @@
+//! Pictures of a brief.
+//!
+//! Knows nothing of the sky or of files: a chart computes no angle and opens nothing.
+
+pub mod canvas;

@@ -1,0 +1,3 @@
+//! Pictures, checked from the outside.
+
+mod canvas;
