@@ -62,6 +62,11 @@ impl Curve {
         self.time_s(-1.0)
     }
 
+    /// Where it ends.
+    pub fn end_s(&self) -> f64 {
+        self.time_s(1.0)
+    }
+
     /// The value at the first node.
     pub fn first(&self) -> f64 {
         self.values[0]
@@ -82,6 +87,17 @@ impl Curve {
         x * b1 + (self.coefficients[0] - b2)
     }
 
+    /// Value and derivative by x.
+    pub(super) fn value_and_slope_x(&self, x: f64) -> [f64; 2] {
+        let (mut b1, mut b2, mut d1, mut d2) = (0.0, 0.0, 0.0, 0.0);
+        let twice = 2.0 * x;
+        for &c in self.coefficients[1..self.len()].iter().rev() {
+            (d1, d2) = (twice * d1 + (2.0 * b1 - d2), d1);
+            (b1, b2) = (twice * b1 + (c - b2), b1);
+        }
+        [x * b1 + (self.coefficients[0] - b2), x * d1 + (b1 - d2)]
+    }
+
     /// Value, first and second derivative by x: Clenshaw's sum differentiated twice.
     pub(super) fn jet_x(&self, x: f64) -> [f64; 3] {
         let (mut b1, mut b2, mut d1, mut d2, mut e1, mut e2) = (0.0, 0.0, 0.0, 0.0, 0.0, 0.0);
@@ -97,6 +113,11 @@ impl Curve {
     /// The time in seconds at x ∈ [−1, 1].
     pub(super) fn time_s(&self, x: f64) -> f64 {
         self.mid_s + self.half_s * x
+    }
+
+    /// A time in seconds as x ∈ [−1, 1].
+    pub(super) fn scaled(&self, t_s: f64) -> f64 {
+        ((t_s - self.mid_s) / self.half_s).clamp(-1.0, 1.0)
     }
 
     /// The node positions.

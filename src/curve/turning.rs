@@ -153,8 +153,8 @@ impl Curve {
             }
             let next = x - slope / bend;
             let next = if next >= low && next <= high { next } else { f64::midpoint(low, high) };
-            // the value errs by half the bend times the square of this
-            if (next - x).abs() < 1e-7 {
+            // the next step would be of the order of this one's square, and the value errs by that squared again
+            if (next - x).abs() < 1e-4 {
                 return next;
             }
             x = next;

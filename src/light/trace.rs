@@ -48,7 +48,7 @@ impl Trace {
     /// The crossing of a level between one peak and the next, which lie on both sides of it; seconds from take-off.
     pub(super) fn meets(&self, level: f64, after: usize) -> f64 {
         let (from, to) = (self.peaks[after], self.peaks[after + 1]);
-        self.curves[from.curve].meets(level, from.at_s, to.at_s)
+        self.curves[from.curve].meets(level, from.sine < level, from.at_s, to.at_s)
     }
 
     /// The highest point of the whole path.
