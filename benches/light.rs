@@ -26,7 +26,8 @@ fn elevation_at_a_time_along_a_path(bencher: Bencher<'_, '_>) {
     let (sky, path) = (Sky::default(), fly(&twelve_hours()).unwrap());
     let window = sky.window(path.takeoff, path.landing());
     let leg = &path.legs()[0];
-    bencher.bench_local(|| sine_of_elevation(leg.normal(black_box(20_000.0)), &window.at(black_box(20_000.0))));
+    bencher
+        .bench_local(|| sine_of_elevation(leg.normal(black_box(20_000.0)), &window.at(black_box(20_000.0))));
 }
 
 #[divan::bench]

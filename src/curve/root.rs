@@ -61,7 +61,11 @@ impl Curve {
         for _ in 0..80 {
             let [value, slope] = self.value_and_slope_x(x);
             let gap = value - level;
-            if (gap < 0.0) == rising { low = x } else { high = x }
+            if (gap < 0.0) == rising {
+                low = x
+            } else {
+                high = x
+            }
             let step = gap / slope;
             let next = x - step;
             let inside = next >= low && next <= high;
@@ -106,7 +110,7 @@ mod tests {
     #[test]
     fn a_level_is_met_where_the_sine_is_that_high() {
         let band = Bandwidth { body_rad_s: 1.0, path_rad_s: 0.0 };
-        let curve = Curve::through(0.0, 3.0, band, f64::sin).unwrap();
+        let curve = Curve::through(0.0, 3.0, band, |t| t.sin()).unwrap();
         let half_pi = std::f64::consts::FRAC_PI_2;
         for level in [0.0001_f64, 0.5, 0.999_999] {
             assert!((curve.meets(level, true, 0.0, half_pi) - level.asin()).abs() < 3e-6, "{level}");

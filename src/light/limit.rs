@@ -85,7 +85,8 @@ impl Limit {
 
     /// The sine of that elevation.
     pub(super) fn sine(self) -> f64 {
-        static SINES: LazyLock<[f64; 4]> = LazyLock::new(|| Limit::ALL.map(|limit| limit.elevation().rad().sin()));
+        static SINES: LazyLock<[f64; 4]> =
+            LazyLock::new(|| Limit::ALL.map(|limit| limit.elevation().rad().sin()));
         SINES[self as usize]
     }
 
