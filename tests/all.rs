@@ -5,4 +5,5 @@ mod places;
 mod sky;
 mod path;
 mod light;
+mod reports;
 mod charts;
