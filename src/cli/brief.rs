@@ -58,14 +58,14 @@ pub(super) fn run(request: &BriefRequest) -> Outcome {
             }
         }
     }
-    refused += written(request, &briefs);
+    let unwritten = written(request, &briefs);
     let shown = shown(&briefs, request.form)
         .map_or_else(Err, |text| terminal::show(&text).map_err(|e| e.to_string()));
     if let Err(problem) = shown {
         terminal::complain(&format!("standard output: {problem}"), None);
         return Outcome::Failed;
     }
-    match (briefs.is_empty(), refused) {
+    match (briefs.len() == unwritten, refused + unwritten) {
         (true, _) => Outcome::Failed,
         (false, 0) => Outcome::Done,
         (false, _) => Outcome::SomeRefused,

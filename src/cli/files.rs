@@ -67,12 +67,19 @@ impl<'a> Batch<'a> {
         Ok(())
     }
 
-    /// Gives all files their names.
-    pub(super) fn finish(self) -> Result<Vec<PathBuf>, FileError> {
-        let named = self.written.into_iter().map(|(file, path)| {
-            file.persist(&path).map_err(|e| FileError::Write { path: path.clone(), source: e.error })?;
-            Ok(path)
-        });
-        named.collect()
+    /// Gives all files their names; if one cannot take it, those that have are taken away again.
+    pub(super) fn finish(self) -> Result<(), FileError> {
+        let mut named: Vec<PathBuf> = Vec::with_capacity(self.written.len());
+        for (file, path) in self.written {
+            if let Err(error) = file.persist(&path) {
+                for done in &named {
+                    // what cannot be removed either leaves nothing better to do
+                    let _ = std::fs::remove_file(done);
+                }
+                return Err(FileError::Write { path, source: error.error });
+            }
+            named.push(path);
+        }
+        Ok(())
     }
 }

@@ -31,6 +31,10 @@ pub fn flight_file(text: &str, source_name: &str) -> Result<Flight, IntakeError>
     if text.trim().is_empty() {
         return Err(fail(Origin::Whole, Problem::Empty));
     }
+    // UTF-16 of plain letters is valid UTF-8, but with zeros between them
+    if let Some(byte) = text.find('\0') {
+        return Err(fail(Origin::Whole, Problem::NotText(byte)));
+    }
     let parsed = DeTable::parse(text).map_err(|error| {
         let origin = error.span().map_or(Origin::Whole, |span| line_and_column(text, span.start));
         fail(origin, Problem::Toml(error.message().replace('\n', ", ")))
@@ -154,7 +158,7 @@ fn wrong(
 /// Refuses fields that are not known, so that a misspelt one is not passed over in silence.
 fn only(table: &DeTable<'_>, known: &[&str]) -> Found<()> {
     match table.keys().find(|key| !known.contains(&key.get_ref().as_ref())) {
-        Some(key) => Err((key.span(), Problem::UnknownField(key.get_ref().chars().take(40).collect()))),
+        Some(key) => Err((key.span(), Problem::UnknownField(key.get_ref().to_string()))),
         None => Ok(()),
     }
 }
@@ -171,7 +175,7 @@ fn number(field: &'static str, value: &Value<'_>) -> Found<f64> {
     let text = match value.get_ref() {
         DeValue::Float(float) => float.as_str().to_string(),
         DeValue::Integer(integer) if integer.radix() == 10 => integer.as_str().to_string(),
-        other => return Err(wrong(field, other, "a number", value.span())),
+        other => return Err(wrong(field, other, "a decimal number", value.span())),
     };
     // a NaN is a number to TOML but not to us: every range refuses it later, with its name
     text.parse().map_err(|_| wrong(field, value.get_ref(), "a number", value.span()))
