@@ -9,3 +9,4 @@ mod sky;
 mod path;
 mod light;
 mod charts;
+mod cli;

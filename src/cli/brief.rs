@@ -111,8 +111,7 @@ fn flights(request: &BriefRequest) -> Vec<Result<(Flight, String), Refusal>> {
 }
 
 fn read_flight(path: &Path) -> Result<(Flight, String), Refusal> {
-    let source_name =
-        if path == Path::new("-") { "standard input".to_string() } else { path.display().to_string() };
+    let source_name = files::source_name(path);
     let bytes = files::read(path)?;
     let text = std::str::from_utf8(&bytes).map_err(|error| IntakeError {
         source_name: source_name.clone(),

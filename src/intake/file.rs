@@ -15,8 +15,10 @@ pub(super) const FIELDS: [&str; 10] =
     ["name", "from", "to", "takeoff", "landing", "airborne", "level_ft", "dut1_s", "waypoint", "polar_areas"];
 /// What a waypoint may hold.
 pub(super) const WAYPOINT_FIELDS: [&str; 2] = ["at", "time"];
-const PLACE_FIELDS: [&str; 2] = ["lat", "lon"];
-const POLAR_FIELDS: [&str; 2] = ["north_deg", "south_deg"];
+/// What a place in degrees must hold.
+pub(super) const PLACE_FIELDS: [&str; 2] = ["lat", "lon"];
+/// What the limits of the polar areas may hold.
+pub(super) const POLAR_FIELDS: [&str; 2] = ["north_deg", "south_deg"];
 
 /// A value of the file or what is wrong with it, with the bytes it stands on.
 type Found<T> = Result<T, (Range<usize>, Problem)>;

@@ -1,6 +1,7 @@
 //! What can be wrong with a flight as it was given, where it stands, and the cure.
 
 use super::draft::Origin;
+use super::file::{FIELDS, PLACE_FIELDS, POLAR_FIELDS, WAYPOINT_FIELDS};
 use crate::places::UnknownAerodrome;
 use crate::units::{Dut1Error, PlaceError, YEARS};
 
@@ -189,12 +190,20 @@ fn unknown_place_hint(unknown: &UnknownAerodrome) -> Option<String> {
     unknown.hint()
 }
 
-/// The known field that a misspelt one shares most letters' pairs with.
+/// The known field that a misspelt one shares all letters or most letters' pairs with.
 fn near_field(field: &str) -> Option<String> {
-    let known = super::file::FIELDS.iter().chain(&super::file::WAYPOINT_FIELDS);
+    let known = [&FIELDS[..], &WAYPOINT_FIELDS, &PLACE_FIELDS, &POLAR_FIELDS].concat();
+    let lower = field.to_ascii_lowercase();
+    let letters = |word: &str| {
+        let mut bytes = word.as_bytes().to_vec();
+        bytes.sort_unstable();
+        bytes
+    };
     let pairs = |word: &str| word.as_bytes().windows(2).map(<[u8]>::to_vec).collect::<Vec<_>>();
-    let given = pairs(&field.to_ascii_lowercase());
+    let given = pairs(&lower);
     let shared = |word: &str| pairs(word).iter().filter(|pair| given.contains(pair)).count();
-    let best = known.max_by_key(|word| shared(word))?;
-    (shared(best) * 2 >= best.len() - 1).then(|| format!("did you mean '{best}'?"))
+    let exchanged = known.iter().find(|word| letters(word) == letters(&lower));
+    let alike =
+        || known.iter().max_by_key(|word| shared(word)).filter(|best| shared(best) * 2 >= best.len() - 1);
+    exchanged.or_else(alike).map(|best| format!("did you mean '{best}'?"))
 }
