@@ -1,5 +1,8 @@
 //! The table of contents of everything that is checked against the outside.
 
+#![allow(clippy::unwrap_used, reason = "also what a test calls may panic")]
+
+mod house;
 mod tables;
 mod places;
 mod sky;
@@ -7,3 +10,4 @@ mod path;
 mod light;
 mod reports;
 mod charts;
+mod cli;

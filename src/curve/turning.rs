@@ -82,7 +82,9 @@ impl Curve {
     /// Value at a turning point within 1e−11; a rise or fall of less than 5e−10 may be left out.
     pub fn turning_points(&self) -> TurningPoints {
         let mut found = TurningPoints { x: [0.0; MOST], len: 0 };
-        if self.swing() < FLAT {
+        let swing = self.swing();
+        // a function that gives no number would be halved without end
+        if swing < FLAT || !swing.is_finite() {
             return found;
         }
         let bounds = Bounds::of(self);
@@ -190,6 +192,12 @@ mod tests {
         let found = turns(|t| 0.4 * (t.sin() + t * (1.0 - 1e-6)) / 4.0, 1.0, 6.0);
         assert_eq!(found.len(), 2, "{found:?}");
         assert!(found[1].0 - found[0].0 < 0.003);
+    }
+
+    #[test]
+    fn a_function_that_gives_no_number_ends_the_search() {
+        assert!(turns(|_| f64::NAN, 7.3e-5, 40_000.0).is_empty());
+        assert!(turns(|t| if t > 1e4 { f64::INFINITY } else { 0.5 }, 7.3e-5, 40_000.0).is_empty());
     }
 
     #[test]

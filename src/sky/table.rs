@@ -19,10 +19,13 @@ const TERMS: usize = 9;
 const PIECE_DAYS: f64 = 8.0;
 /// Days of margin on each side of a piece: half the longest interval that is certain to lie in one piece.
 const MARGIN_DAYS: f64 = 1.0;
-/// TT days since J2000.0 of the first piece's beginning, before 1973.
-const FIRST_DAY: f64 = -9864.0;
-/// Pieces that reach past the end of 2100.
-const PIECES: usize = 5848;
+/// The last TT day since J2000.0 that the ephemeris is stated for, noon of 1 January 2100; the last piece's margin ends
+/// there and must not go beyond.
+const LAST_DAY: f64 = 36_525.0;
+/// Pieces from before 1973 to the last day.
+const PIECES: usize = 5799;
+/// TT days since J2000.0 of the first piece's beginning.
+const FIRST_DAY: f64 = LAST_DAY - MARGIN_DAYS - PIECES as f64 * PIECE_DAYS;
 
 /// Earth rotation angle in turns at J2000.0 UT1 and its excess over a turn a day (IAU 2000 resolution B1.8).
 const ROTATION_AT_J2000: f64 = 0.779_057_273_264_0;
@@ -34,7 +37,7 @@ struct Piece {
     terms: [[f64; 4]; TERMS],
 }
 
-/// The tabulated sky, from 1973 to 2100, each piece built when first asked for and then shared by all threads.
+/// The tabulated sky, from 1973 to 2099, each piece built when first asked for and then shared by all threads.
 ///
 /// # Accuracy
 /// Within 0.001″ of the model it tabulates, and that within 0.022″ of JPL DE421 (`tests/tables/skyfield-de421`).
