@@ -1,7 +1,7 @@
 //! Instants as people and machines read them.
 
 use crate::units::Instant;
-use chrono::{DateTime, Offset, SubsecRound, Utc};
+use chrono::{DateTime, Offset, SubsecRound, Timelike, Utc};
 use chrono_tz::Tz;
 
 /// RFC 3339 in UTC to the millisecond, for machines.
@@ -46,6 +46,21 @@ pub(crate) fn local_minute(instant: Instant, zone: Tz) -> String {
         _ => format!("−{}", -days),
     };
     format!("{}{mark}", local.format("%H:%M"))
+}
+
+/// `00:10` on a zone's clock.
+pub(crate) fn minute_in(instant: Instant, zone: Tz) -> String {
+    to_second(instant).with_timezone(&zone).format("%H:%M").to_string()
+}
+
+/// `18 Dec` on a zone's calendar.
+pub(crate) fn day_in(instant: Instant, zone: Tz) -> String {
+    to_second(instant).with_timezone(&zone).format("%-d %b").to_string()
+}
+
+/// Minutes since a zone's last midnight by its clock.
+pub(crate) fn minute_of_day(instant: Instant, zone: Tz) -> u32 {
+    to_second(instant).with_timezone(&zone).num_seconds_from_midnight() / 60
 }
 
 /// `UTC−5`, `UTC+5:30`: a zone's offset at an instant.

@@ -14,6 +14,27 @@ pub(crate) fn state_key(state: State) -> &'static str {
     }
 }
 
+/// A state's name where room is scarce.
+pub(crate) fn state_short(state: State) -> &'static str {
+    match state {
+        State::Daylight => "day",
+        State::CivilTwilight => "civil",
+        State::NauticalTwilight => "naut.",
+        State::AstronomicalTwilight => "astr.",
+        State::Darkness => "dark",
+    }
+}
+
+/// The elevation of a limit as it is usually written.
+pub(crate) fn limit_elevation(limit: Limit) -> &'static str {
+    match limit {
+        Limit::Horizon => "−50′",
+        Limit::Civil => "−6°",
+        Limit::Nautical => "−12°",
+        Limit::Astronomical => "−18°",
+    }
+}
+
 /// A limit's key.
 pub(crate) fn limit_key(limit: Limit) -> &'static str {
     match limit {
