@@ -44,7 +44,7 @@ impl Flag {
 }
 
 /// Hangs flags in at most `rows` rows between `left` and `right`; `None` where there is no room. Those first in the
-/// slice are served first.
+/// slice are served first; served from the right to the left they climb over each other.
 ///
 /// No two flags overlap, and no line passes through a flag.
 pub fn flags(masts: &[Mast], rows: usize, (left, right): (f64, f64)) -> Vec<Option<Flag>> {
@@ -52,15 +52,12 @@ pub fn flags(masts: &[Mast], rows: usize, (left, right): (f64, f64)) -> Vec<Opti
     let mut answer = Vec::with_capacity(masts.len());
     for mast in masts {
         let x = mast.x;
-        let places = (0..rows).flat_map(|row| {
-            let behind = Flag { row, left: x + GAP, right: x + GAP + mast.width, x };
-            let before = Flag { row, left: x - GAP - mast.width, right: x - GAP, x };
-            [behind, before]
-        });
+        let behind = (0..rows).map(|row| Flag { row, left: x + GAP, right: x + GAP + mast.width, x });
+        let before = (0..rows).map(|row| Flag { row, left: x - GAP - mast.width, right: x - GAP, x });
         let free = |flag: &Flag| {
             flag.left >= left && flag.right <= right && hung.iter().all(|other| flag.is_clear_of(other))
         };
-        let flag = places.into_iter().find(free);
+        let flag = behind.chain(before).find(free);
         hung.extend(flag);
         answer.push(flag);
     }

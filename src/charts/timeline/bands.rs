@@ -11,8 +11,8 @@ use crate::light::{Limit, State};
 
 /// Between the middles of two labels at the edge at least.
 const LABEL_ROOM: f64 = 19.0;
-/// A band that is lower than this is not named at the edge.
-const NAME_ROOM: f64 = 46.0;
+/// From line to line of a name at the edge.
+const NAME_LINE: f64 = 18.0;
 
 /// The upper and lower elevation of a state.
 fn extent(state: State) -> (f64, f64) {
@@ -101,13 +101,17 @@ fn apart(ys: &[f64], room: f64, plot: Rect) -> Vec<f64> {
 fn names(canvas: &mut Canvas, frame: &Frame) {
     let style = TextStyle { ink: MUTED, ..letters(TEXT).anchored(Across::Start, Level::Middle) };
     for state in State::ALL {
-        let Some(band) = band(state, frame).filter(|band| band.height() >= NAME_ROOM) else { continue };
+        let Some(band) = band(state, frame) else { continue };
         let x = frame.plot.right + 13.0;
         let middle = f64::midpoint(band.top, band.bottom);
         let name = spoken(state_key(state));
         let lines: Vec<&str> = name.split(' ').collect();
+        // the limits above and below need their own room
+        if band.height() < NAME_LINE * lines.len() as f64 + 24.0 {
+            continue;
+        }
         for (i, line) in lines.iter().enumerate() {
-            let y = middle + 18.0 * (i as f64 - (lines.len() - 1) as f64 / 2.0);
+            let y = middle + NAME_LINE * (i as f64 - (lines.len() - 1) as f64 / 2.0);
             canvas.text(&fitted(line, &style, RIGHT - x + MARGIN / 2.0), Point::new(x, y), &style);
         }
     }

@@ -124,7 +124,7 @@ fn ticks(takeoff: Instant, airborne_s: f64, zone: Tz) -> Vec<Tick> {
     let step = STEPS_MIN.into_iter().find(|&s| f64::from(s) * px_per_min >= TICK_ROOM).unwrap_or(360);
     let mut last_day = day_in(takeoff, zone);
     let round = whole(takeoff, airborne_s, step.min(QUARTER_MIN))
-        .filter(|&at_s| minute_of_day(takeoff.after_s(at_s), zone) % step == 0);
+        .filter(|&at_s| minute_of_day(takeoff.after_s(at_s), zone).is_multiple_of(step));
     let tick = |at_s: f64| {
         let at = takeoff.after_s(at_s);
         let day = day_in(at, zone);

@@ -40,9 +40,12 @@ pub(super) fn events(brief: &Brief) -> Vec<Event> {
     let touches = touches.map(|(touch, sample)| {
         event(sample, format!("touches {}", limit_elevation(touch.limit)), Marker::Circle)
     });
+    let between_deg = brief.at_highest.elevation.0.deg() - brief.at_lowest.elevation.0.deg();
+    // as many as tell the two apart
+    let decimals = if between_deg < 0.2 { 3 } else { 1 + usize::from(between_deg < 2.0) };
     let peaks = [("highest", &brief.at_highest), ("lowest", &brief.at_lowest)].map(|(what, sample)| Event {
         is_numbered: false,
-        ..event(sample, format!("{what} {}", degrees(sample.elevation.0.deg(), 1)), Marker::Diamond)
+        ..event(sample, format!("{what} {}", degrees(sample.elevation.0.deg(), decimals)), Marker::Diamond)
     });
     let mut events: Vec<Event> = crossings.chain(touches).chain(peaks).collect();
     events.sort_by(|a, b| a.seen.at_s.total_cmp(&b.seen.at_s));

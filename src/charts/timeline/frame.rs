@@ -22,7 +22,7 @@ pub(super) struct Span {
 /// The share of the height that is left free above and below the curve: room for labels.
 const ROOM: f64 = 0.13;
 /// No plot spans less, or it would show rounding.
-const LEAST_DEG: f64 = 0.5;
+const LEAST_DEG: f64 = 0.12;
 
 impl Span {
     /// A span for a curve: all of it, the limit that is nearest to it, and room.
@@ -51,7 +51,7 @@ pub(super) struct Frame {
 }
 
 /// Degrees from tick to tick, of which the finest with room is taken.
-const STEPS_DEG: [f64; 10] = [0.05, 0.1, 0.2, 0.5, 1.0, 2.0, 5.0, 10.0, 15.0, 30.0];
+const STEPS_DEG: [f64; 12] = [0.01, 0.02, 0.05, 0.1, 0.2, 0.5, 1.0, 2.0, 5.0, 10.0, 15.0, 30.0];
 /// From tick to tick at least.
 const TICK_ROOM: f64 = 38.0;
 

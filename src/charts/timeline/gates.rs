@@ -6,7 +6,7 @@ use super::frame::Frame;
 use super::layout::{FLAG_ROW, PLOT_LEFT, PLOT_RIGHT, RIGHT};
 use super::style::{CIRCLE, INK, MUTED, SMALL, fitted, letters};
 use crate::Brief;
-use crate::charts::canvas::{Across, Canvas, Dash, Level, Point, Stroke, TextStyle, measure};
+use crate::charts::canvas::{Across, Canvas, Dash, Ink, Level, Point, Stroke, TextStyle, measure};
 use crate::charts::labels::{Flag, Mast, flags};
 use crate::label::words::circle_name;
 use crate::path::Heading;
@@ -98,6 +98,7 @@ impl Gate {
             (Stroke::new(MUTED, 1.0), Dash::Dashed(2.0, 5.0))
         };
         canvas.line(&[at(top), at(plot.top)], stroke);
+        canvas.line(&[at(plot.top), at(plot.bottom)], Stroke::new(Ink::WHITE.with_alpha(0.32), 3.0));
         canvas.line(&[at(plot.top), at(plot.bottom)], stroke.dashed(dash));
     }
 }
