@@ -1,10 +1,10 @@
 //! The Sun's almanac quantities and a place's day, as text and JSON.
 
-use super::clean::one_line;
-use super::clock::{day_and_second, local_minute, machine, offset, second};
 use super::record::rounded;
 use super::table::{columns, wrapped};
-use super::words::{event_key, limit_key, spoken, state_key};
+use crate::label::clock::{day_and_second, local_minute, machine, offset, second};
+use crate::label::one_line;
+use crate::label::words::{event_key, limit_key, spoken, state_key};
 use crate::light::State;
 use crate::sky::{YearEvent, YearMoment};
 use crate::units::Angle;

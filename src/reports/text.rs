@@ -1,11 +1,13 @@
 //! A brief that a crew reads in half a minute.
 
-use super::clean::one_line;
-use super::clock::{date, day_and_second, duration, local_day_and_minute, local_minute, offset, second};
 use super::table::{columns, wrapped};
-use super::words::{circle_name, event_key, heading_key, limit_key, spoken, state_key};
 use crate::Brief;
 use crate::intake::{Flight, Stop};
+use crate::label::clock::{
+    date, day_and_second, duration, local_day_and_minute, local_minute, offset, second,
+};
+use crate::label::one_line;
+use crate::label::words::{circle_name, event_key, heading_key, limit_key, spoken, state_key};
 use crate::light::{Sample, State};
 use crate::units::{Instant, Metres, Place};
 use chrono_tz::Tz;
