@@ -39,7 +39,7 @@ pub fn sun_text(brief: &SunBrief) -> String {
     ]
     .map(|row| row.map(str::to_string));
     let here = brief.here.as_ref().map_or(String::new(), |day| format!("\n{}", day_text(day)));
-    let cautions: String = cautions(brief).iter().map(|caution| wrapped("  -", caution, WIDTH)).collect();
+    let cautions: String = cautions(brief).iter().map(|caution| wrapped("  - ", caution, WIDTH)).collect();
     format!(
         "Sun   {} UTC {}\n{}{here}\nCautions\n{cautions}",
         day_and_second(brief.instant),
@@ -70,7 +70,7 @@ fn day_text(day: &PlaceDay) -> String {
     out.push_str(&columns(&now));
     out.push_str(&columns(&event_rows(day)));
     if let Some(said) = polar(day) {
-        out.push_str(&wrapped(" ", said, WIDTH));
+        out.push_str(&wrapped("  ", said, WIDTH));
     }
     out
 }
@@ -272,7 +272,7 @@ pub fn year_text(year: i32, moments: &[(YearMoment, SunBrief)]) -> String {
     format!(
         "The Sun's year {year}, UTC\n{}\n{}",
         columns(&moments.iter().map(row).collect::<Vec<_>>()),
-        wrapped("  -", note, WIDTH)
+        wrapped("  - ", note, WIDTH)
     )
 }
 

@@ -160,7 +160,7 @@ fn segments(brief: &Brief) -> String {
         let seconds = brief.light.seconds.in_state(state);
         (seconds > 0.0).then(|| format!("{} {}", spoken(state_key(state)), duration(seconds)))
     });
-    format!("Light\n{}{}", columns(&rows), wrapped("  in all:", &sums.collect::<Vec<_>>().join(", "), WIDTH))
+    format!("Light\n{}{}", columns(&rows), wrapped("  in all: ", &sums.collect::<Vec<_>>().join(", "), WIDTH))
 }
 
 fn crossings(brief: &Brief) -> String {
@@ -204,7 +204,7 @@ fn touches(brief: &Brief) -> String {
             place(sample.position.place),
             touch.margin.arcsec().abs(),
         );
-        wrapped(" ", &sentence, WIDTH)
+        wrapped("  ", &sentence, WIDTH)
     };
     let lines: String = pairs.map(line).collect();
     if lines.is_empty() { lines } else { format!("Touches\n{lines}") }
@@ -243,6 +243,6 @@ fn circles(brief: &Brief) -> String {
 
 fn cautions(brief: &Brief) -> String {
     let lines: String =
-        super::caution::cautions(brief).iter().map(|caution| wrapped("  -", caution, WIDTH)).collect();
+        super::caution::cautions(brief).iter().map(|caution| wrapped("  - ", caution, WIDTH)).collect();
     format!("Cautions\n{lines}")
 }
