@@ -25,7 +25,7 @@ const OPEN_SUBROOMS: [(&str, &str); 3] = [("charts", "canvas"), ("label", "clock
 /// The rooms in walking order, each with what it may import besides its own files.
 const ROOMS: &[(&str, &[From])] = &[
     ("units", &[]),
-    ("curve", &[]),
+    ("curve", &[Face("units")]),
     ("places", &[Face("units")]),
     ("intake", &[Face("units"), Face("places")]),
     ("path", &[Face("units"), Face("intake")]),
