@@ -9,7 +9,7 @@ use super::model::apparent;
 use super::sun::SunPlace;
 use super::time::tt_minus_utc_s;
 use crate::curve::{coefficients, lobatto};
-use crate::units::{Dut1, Instant};
+use crate::units::{Dut1, Instant, Lane};
 use std::f64::consts::TAU;
 use std::sync::OnceLock;
 
@@ -104,9 +104,12 @@ impl SunWindow<'_> {
     }
 
     /// The Sun's place, so many seconds after the window's beginning.
-    pub fn at(&self, seconds: f64) -> SunPlace {
-        let [x, y, z, distance_au] = self.piece.at(self.x_at_begin + seconds * self.x_per_s);
-        let (sin, cos) = (self.angle_at_begin + seconds * super::MEAN_SUN_RAD_S).sin_cos();
+    #[inline]
+    pub fn at<L: Lane>(&self, seconds: L) -> SunPlace<L> {
+        let [x, y, z, distance_au] =
+            self.piece.at(L::splat(self.x_at_begin) + seconds * L::splat(self.x_per_s));
+        let angle = L::splat(self.angle_at_begin) + seconds * L::splat(super::MEAN_SUN_RAD_S);
+        let (sin, cos) = angle.sine_cosine();
         SunPlace { direction: [cos * x + sin * y, cos * y - sin * x, z], distance_au }
     }
 }
@@ -136,14 +139,15 @@ impl Piece {
     }
 
     /// Clenshaw's sum for the four series at once.
-    fn at(&self, x: f64) -> [f64; 4] {
-        let (mut b1, mut b2) = ([0.0; 4], [0.0; 4]);
-        let twice = 2.0 * x;
+    #[inline]
+    fn at<L: Lane>(&self, x: L) -> [L; 4] {
+        let (mut b1, mut b2) = ([L::splat(0.0); 4], [L::splat(0.0); 4]);
+        let twice = L::splat(2.0) * x;
         for term in self.terms[1..].iter().rev() {
-            let b0 = std::array::from_fn(|i| twice * b1[i] + (term[i] - b2[i]));
+            let b0 = std::array::from_fn(|i| twice * b1[i] + (L::splat(term[i]) - b2[i]));
             (b1, b2) = (b0, b1);
         }
-        std::array::from_fn(|i| x * b1[i] + (self.terms[0][i] - b2[i]))
+        std::array::from_fn(|i| x * b1[i] + (L::splat(self.terms[0][i]) - b2[i]))
     }
 }
 
