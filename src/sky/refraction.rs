@@ -6,6 +6,9 @@ use super::air::Ray;
 use super::{GeometricElevation, Horizon};
 use crate::units::{Angle, Metres};
 
+/// Refraction at the horizon by the almanacs' convention (Nautical Almanac, explanation).
+pub const HORIZONTAL_REFRACTION: Angle = Angle::from_arcmin(34.0);
+
 /// The elevation above level at which a body is seen, refraction included.
 #[derive(Debug, Clone, Copy, PartialEq, PartialOrd)]
 pub struct ApparentElevation(pub Angle);

@@ -10,7 +10,7 @@ const SEMIDIAMETER: Angle = Angle::from_arcsec(959.63);
 const TWO_TRACES_DEG: f64 = 0.0002;
 
 fn horizon(row: &Row) -> Horizon {
-    Horizon::raised(Metres::from_feet(number(row, "horizon_ft"))).unwrap()
+    Horizon::raised(Metres::from_feet(number(row, "horizon_ft"))).expect("a horizon that can be")
 }
 
 /// Our limit less the row's, in degrees.

@@ -4,3 +4,4 @@ mod places;
 mod seasons;
 mod handbooks;
 mod horizon;
+mod moon;
