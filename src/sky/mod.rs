@@ -13,11 +13,13 @@ mod observer;
 mod horizon;
 mod refraction;
 mod almanac;
+mod illuminance;
 mod year;
 
 pub use air::{Air, standard_air};
 pub use almanac::Almanac;
 pub use horizon::{Horizon, HorizonError};
+pub use illuminance::{Lux, moonlight, sunlight};
 pub use moon::{MoonPlace, Phase};
 pub use observer::{Body, GeometricElevation, azimuth, elevation, sine_of_elevation};
 pub use refraction::{

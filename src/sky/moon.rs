@@ -7,7 +7,7 @@ use super::sun::{AU_M, SunPlace};
 use super::{HORIZONTAL_REFRACTION, observer};
 use crate::units::{Angle, Lane, Place, dot, wgs84};
 
-/// The Moon's radius over the Earth's equatorial radius (IAU 1982; Astronomical Almanac, section L).
+/// The Moon's radius over the Earth's equatorial radius (IAU 1982).
 const RADIUS_OVER_EARTHS: f64 = 0.272_507_6;
 /// The Moon's radius in astronomical units.
 const RADIUS_AU: f64 = RADIUS_OVER_EARTHS * wgs84::A_M / AU_M;

@@ -87,7 +87,7 @@ fn the_moon_is_larger_overhead_than_on_the_horizon() {
         // 1 + sin(elevation) × sin(parallax), to the square of the parallax
         let wanted = 1.0 + elevation(place, &moon).0.rad().sin() * moon.horizontal_parallax().rad();
         assert!((grown - wanted).abs() < 3e-4, "{row:?}: {grown} {wanted}");
-        // 14.7′ to 16.8′ from the Earth's centre (Astronomical Almanac, section D)
+        // 14.7′ to 16.8′ from the Earth's centre at the nearest and farthest that the Moon ever comes
         assert!((14.65..16.8).contains(&(moon.semidiameter().deg() * 60.0)));
         seen += 1;
     }

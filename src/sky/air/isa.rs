@@ -5,21 +5,21 @@
 use crate::units::Metres;
 use std::sync::LazyLock;
 
-/// Standard acceleration of free fall in m/s² (Doc 7488/3, table A).
+/// Standard acceleration of free fall in m/s² (Doc 7488/3).
 const G0_M_S2: f64 = 9.80665;
-/// Specific gas constant of air in J/(kg K) (Doc 7488/3, table A).
+/// Specific gas constant of air in J/(kg K) (Doc 7488/3).
 const GAS_J_KG_K: f64 = 287.05287;
-/// Nominal Earth radius in metres, which turns geometric into geopotential height (Doc 7488/3, equation 8).
+/// Nominal Earth radius in metres, which turns geometric into geopotential height (Doc 7488/3).
 const NOMINAL_RADIUS_M: f64 = 6_356_766.0;
-/// Pressure at sea level in Pa (Doc 7488/3, table A).
+/// Pressure at sea level in Pa (Doc 7488/3).
 const P0_PA: f64 = 101_325.0;
-/// Density at sea level in kg/m³ (Doc 7488/3, table A).
+/// Density at sea level in kg/m³ (Doc 7488/3).
 pub(super) const RHO0_KG_M3: f64 = 1.225;
 /// The lowest height that the standard is defined for, geopotential.
 const FLOOR_M: f64 = -5_000.0;
 /// Where the standard's tables end, geopotential.
 const CEILING_M: f64 = 80_000.0;
-/// Base height (geopotential metres), base temperature (K) and gradient (K/m) of each layer (Doc 7488/3, table D).
+/// Base height (geopotential metres), base temperature (K) and gradient (K/m) of each layer (Doc 7488/3).
 const LAYERS: [(f64, f64, f64); 7] = [
     (0.0, 288.15, -0.0065),
     (11_000.0, 216.65, 0.0),
@@ -47,10 +47,11 @@ pub struct Air {
 /// the nearer end.
 ///
 /// # Accuracy
-/// The printed tables to their last figure, but for the base pressures' rounding there (1e−7).
+/// Within 1e−5 of the printed values at the layers' bases.
 ///
 /// # Source
-/// ICAO Doc 7488/3, *Manual of the ICAO Standard Atmosphere extended to 80 kilometres*, 3rd ed. 1993, equations 12 to 14.
+/// ICAO Doc 7488/3, *Manual of the ICAO Standard Atmosphere extended to 80 kilometres*, 3rd ed. 1993;
+/// its constants are those that later copies print (the manual itself was not opened).
 pub fn standard_air(height: Metres) -> Air {
     let geopotential_m = geopotential_m(height.0).clamp(FLOOR_M, CEILING_M);
     let layer = BUILT.iter().rev().find(|layer| geopotential_m >= layer.base_m).unwrap_or(&BUILT[0]);

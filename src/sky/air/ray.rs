@@ -191,7 +191,7 @@ mod tests {
     #[test]
     fn a_ray_at_half_height_bends_by_the_series_of_the_textbooks() {
         // R = (n − 1)(1 − β) tan z − (n − 1)(β − (n − 1)/2) tan³ z with β = H/r, H = p/(ρ g), and tan z = 1
-        // (Green 1985, *Spherical Astronomy*, section 4.4)
+        // (any text on spherical astronomy)
         let bent = Ray::seen_from(0.0, std::f64::consts::FRAC_PI_4).bending_to_space_rad(0.0);
         let beta = 101_325.0 / (1.225 * 9.80665) / RADIUS_M;
         let wanted = 1.0 - 2.0 * beta + REFRACTIVITY_AT_SEA_LEVEL / 2.0;
