@@ -1,6 +1,7 @@
 //! The Sun's apparent geocentric place in the Earth-fixed frame, and what follows from it alone.
 
-use crate::units::{Angle, Place};
+use super::observer::Body;
+use crate::units::{Angle, Lane, Place};
 
 /// One astronomical unit in metres (IAU 2012 resolution B2).
 pub(super) const AU_M: f64 = 149_597_870_700.0;
@@ -14,6 +15,18 @@ pub struct SunPlace<L = f64> {
     pub direction: [L; 3],
     /// Distance in astronomical units.
     pub distance_au: L,
+}
+
+impl<L: Lane> Body<L> for SunPlace<L> {
+    #[inline]
+    fn direction(&self) -> [L; 3] {
+        self.direction
+    }
+
+    #[inline]
+    fn distance_au(&self) -> L {
+        self.distance_au
+    }
 }
 
 impl SunPlace {
