@@ -38,20 +38,19 @@ pub(super) struct Clock {
 }
 
 impl Clock {
-    /// The clocks of a flight: UTC, then those whose zones are known; ends of one zone share a clock.
+    /// The clocks of a flight: UTC, then those whose zones are known; two that show the same share an axis.
     pub(super) fn of(brief: &Brief) -> Vec<Self> {
-        let (from, to) = (&brief.flight.from, &brief.flight.to);
-        let mut clocks = vec![Self::new(brief, "UTC".to_string(), Tz::UTC)];
-        match (from.zone, to.zone) {
-            (Some(one), Some(other)) if one == other => {
-                clocks.push(Self::new(brief, format!("{}, {}", from.label, to.label), one));
-            }
-            _ => {
-                let known = [from, to].into_iter().filter_map(|stop| Some((stop.label.clone(), stop.zone?)));
-                clocks.extend(known.map(|(label, zone)| Self::new(brief, label, zone)));
-            }
+        let ends = [&brief.flight.from, &brief.flight.to];
+        let known = ends.into_iter().filter_map(|stop| Some((&stop.label, stop.zone?)));
+        let mut local: Vec<Self> = known.map(|(label, zone)| Self::new(brief, label.clone(), zone)).collect();
+        if let [from, to] = &local[..]
+            && (&from.note, &from.ticks, &from.changes_s) == (&to.note, &to.ticks, &to.changes_s)
+        {
+            local[0].name = format!("{}, {}", from.name, to.name);
+            local.pop();
         }
-        clocks
+        local.insert(0, Self::new(brief, "UTC".to_string(), Tz::UTC));
+        local
     }
 
     fn new(brief: &Brief, name: String, zone: Tz) -> Self {
@@ -62,7 +61,7 @@ impl Clock {
         } else {
             let later = changes_s.iter().map(|&s| offset(takeoff.after_s(s), zone));
             let offsets: Vec<String> = std::iter::once(offset(takeoff, zone)).chain(later).collect();
-            let offsets = offsets.join("→").replace("→UTC", "→");
+            let offsets = offsets.join("/").replace("/UTC", "/");
             format!("{offsets} · {}", day_in(takeoff, zone))
         };
         Self { name, note, ticks: ticks(takeoff, airborne_s, zone), changes_s }
@@ -73,7 +72,8 @@ impl Clock {
         let (left, right) = (frame.plot.left, frame.plot.right);
         canvas.line(&[Point::new(left, top + 2.0), Point::new(right, top + 2.0)], Stroke::new(INK, 1.0));
         let name = letters(TEXT).bold();
-        let room = left - MARGIN - 14.0;
+        // a tick at the very left reaches so far out
+        let room = left - MARGIN - 26.0;
         canvas.text(&fitted(&self.name, &name, room), Point::new(MARGIN, top + 15.0), &name);
         let note = TextStyle { ink: MUTED, ..letters(SMALL) };
         canvas.text(&fitted(&self.note, &note, room), Point::new(MARGIN, top + 33.0), &note);
