@@ -44,7 +44,7 @@ pub(super) fn draw(canvas: &mut Canvas, frame: &Frame) {
     for limit in Limit::ALL {
         let deg = limit.elevation().deg();
         if frame.span.holds(deg) {
-            canvas.line(&level(frame.y(deg)), Stroke::new(INK, 1.2).dashed(Dash::Dashed(9.0, 4.0)));
+            canvas.line(&level(frame.y(deg)), Stroke::new(INK, 1.0).dashed(Dash::Dashed(9.0, 4.0)));
         }
     }
 }

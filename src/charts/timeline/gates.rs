@@ -160,11 +160,11 @@ impl Gate {
         let at = |y: f64| Point::new(self.x, y);
         let plot = frame.plot;
         let (stroke, dash) = if self.is_circle {
-            (Stroke::new(CIRCLE, 1.4), Dash::DashDot(8.0, 4.0))
+            (Stroke::new(CIRCLE, 2.0), Dash::DashDot(8.0, 5.0))
         } else {
             (Stroke::new(MUTED, 1.0), Dash::Dashed(2.0, 5.0))
         };
-        canvas.line(&[at(plot.top), at(plot.bottom)], Stroke::new(Ink::WHITE.with_alpha(0.32), 3.0));
+        canvas.line(&[at(plot.top), at(plot.bottom)], Stroke::new(Ink::WHITE.with_alpha(0.32), 4.0));
         canvas.line(&[at(plot.top), at(plot.bottom)], stroke.dashed(dash));
         let style = style(self.is_circle);
         match self.sign {
