@@ -73,7 +73,10 @@ fn place_day(instant: Instant, stop: Stop, sky: &Sky) -> PlaceDay {
 fn day_about(instant: Instant, stop: &Stop) -> (NaiveDate, Instant, Instant) {
     if let Some(zone) = stop.zone {
         let date = instant.utc().with_timezone(&zone).date_naive();
-        return (date, midnight(date, zone), midnight(date + TimeDelta::days(1), zone));
+        let (next, repeated) = midnights(date + TimeDelta::days(1), zone);
+        // clocks that go back across midnight bring the old date again
+        let end = if next > instant { next } else { repeated };
+        return (date, midnights(date, zone).0, end);
     }
     // local mean time: four minutes to the degree
     let ahead_s = stop.place.lon.deg() * 240.0;
@@ -82,13 +85,15 @@ fn day_about(instant: Instant, stop: &Stop) -> (NaiveDate, Instant, Instant) {
     (date, begin, begin.after_s(86_400.0))
 }
 
-/// The first instant of a date on a zone's clock, which is not 00:00 where clocks go forward at midnight.
-fn midnight(date: NaiveDate, zone: chrono_tz::Tz) -> Instant {
-    let first = (0..4 * 24).find_map(|quarter| {
+/// The instants at which a date begins on a zone's clock: two where clocks go back across midnight, the same twice
+/// everywhere else. Where clocks skip midnight, or the whole date, what comes first after it.
+fn midnights(date: NaiveDate, zone: chrono_tz::Tz) -> (Instant, Instant) {
+    let instant = |local: DateTime<chrono_tz::Tz>| Instant::from_utc(local.with_timezone(&Utc));
+    let first = (0..2 * 24 * 4).find_map(|quarter| {
         let time = date.and_time(NaiveTime::MIN) + TimeDelta::minutes(15 * quarter);
-        zone.from_local_datetime(&time).earliest()
+        let local = zone.from_local_datetime(&time);
+        Some((instant(local.earliest()?), instant(local.latest()?)))
     });
-    let utc: DateTime<Utc> =
-        first.map_or_else(|| date.and_time(NaiveTime::MIN).and_utc(), |local| local.with_timezone(&Utc));
-    Instant::from_utc(utc)
+    let utc = Instant::from_utc(date.and_time(NaiveTime::MIN).and_utc());
+    first.unwrap_or((utc, utc))
 }

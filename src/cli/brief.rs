@@ -58,14 +58,14 @@ pub(super) fn run(request: &BriefRequest) -> Outcome {
             }
         }
     }
-    refused += written(request, &briefs);
+    let unwritten = written(request, &briefs);
     let shown = shown(&briefs, request.form)
         .map_or_else(Err, |text| terminal::show(&text).map_err(|e| e.to_string()));
     if let Err(problem) = shown {
         terminal::complain(&format!("standard output: {problem}"), None);
         return Outcome::Failed;
     }
-    match (briefs.is_empty(), refused) {
+    match (briefs.len() == unwritten, refused + unwritten) {
         (true, _) => Outcome::Failed,
         (false, 0) => Outcome::Done,
         (false, _) => Outcome::SomeRefused,
@@ -111,8 +111,7 @@ fn flights(request: &BriefRequest) -> Vec<Result<(Flight, String), Refusal>> {
 }
 
 fn read_flight(path: &Path) -> Result<(Flight, String), Refusal> {
-    let source_name =
-        if path == Path::new("-") { "standard input".to_string() } else { path.display().to_string() };
+    let source_name = files::source_name(path);
     let bytes = files::read(path)?;
     let text = std::str::from_utf8(&bytes).map_err(|error| IntakeError {
         source_name: source_name.clone(),

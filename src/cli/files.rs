@@ -10,17 +10,22 @@ const LONGEST_INPUT: u64 = 16 << 20;
 /// A file that cannot be read or written.
 #[derive(Debug, thiserror::Error)]
 pub(super) enum FileError {
-    #[error("{}: cannot be read: {source}", .path.display())]
-    Read { path: PathBuf, source: std::io::Error },
-    #[error("{}: longer than {} MB, which no flight file is", .path.display(), LONGEST_INPUT >> 20)]
-    TooLong { path: PathBuf },
+    #[error("{source_name}: cannot be read: {source}")]
+    Read { source_name: String, source: std::io::Error },
+    #[error("{source_name}: longer than {} MB, which no flight file is", LONGEST_INPUT >> 20)]
+    TooLong { source_name: String },
     #[error("{}: cannot be written: {source}", .path.display())]
     Write { path: PathBuf, source: std::io::Error },
 }
 
+/// What a file is called in messages.
+pub(super) fn source_name(path: &Path) -> String {
+    if path == Path::new("-") { "standard input".to_string() } else { path.display().to_string() }
+}
+
 /// All bytes of a file, or of standard input for `-`.
 pub(super) fn read(path: &Path) -> Result<Vec<u8>, FileError> {
-    let fail = |source| FileError::Read { path: path.to_path_buf(), source };
+    let fail = |source| FileError::Read { source_name: source_name(path), source };
     let mut bytes = Vec::new();
     let limit = LONGEST_INPUT + 1;
     if path == Path::new("-") {
@@ -29,7 +34,7 @@ pub(super) fn read(path: &Path) -> Result<Vec<u8>, FileError> {
         std::fs::File::open(path).map_err(fail)?.take(limit).read_to_end(&mut bytes).map_err(fail)?;
     }
     if bytes.len() as u64 > LONGEST_INPUT {
-        Err(FileError::TooLong { path: path.to_path_buf() })
+        Err(FileError::TooLong { source_name: source_name(path) })
     } else {
         Ok(bytes)
     }
@@ -67,12 +72,19 @@ impl<'a> Batch<'a> {
         Ok(())
     }
 
-    /// Gives all files their names.
-    pub(super) fn finish(self) -> Result<Vec<PathBuf>, FileError> {
-        let named = self.written.into_iter().map(|(file, path)| {
-            file.persist(&path).map_err(|e| FileError::Write { path: path.clone(), source: e.error })?;
-            Ok(path)
-        });
-        named.collect()
+    /// Gives all files their names; if one cannot take it, those that have are taken away again.
+    pub(super) fn finish(self) -> Result<(), FileError> {
+        let mut named: Vec<PathBuf> = Vec::with_capacity(self.written.len());
+        for (file, path) in self.written {
+            if let Err(error) = file.persist(&path) {
+                for done in &named {
+                    // what cannot be removed either leaves nothing better to do
+                    let _ = std::fs::remove_file(done);
+                }
+                return Err(FileError::Write { path, source: error.error });
+            }
+            named.push(path);
+        }
+        Ok(())
     }
 }

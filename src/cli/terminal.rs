@@ -20,10 +20,16 @@ pub(super) fn show(text: &str) -> std::io::Result<()> {
 pub(super) fn complain(problem: &dyn std::fmt::Display, hint: Option<&str>) {
     // standard error that has gone away leaves nobody to tell
     let mut err = std::io::stderr().lock();
-    let _ = writeln!(err, "gloamline: {problem}");
+    let _ = writeln!(err, "gloamline: {}", inert(&problem.to_string()));
     if let Some(hint) = hint {
-        let _ = writeln!(err, "  hint: {hint}");
+        let _ = writeln!(err, "  hint: {}", inert(hint));
     }
+}
+
+/// A complaint without control characters: the name of a file may hold any.
+fn inert(text: &str) -> String {
+    let escaped = |c: char| if c.is_control() { c.escape_default().to_string() } else { c.to_string() };
+    text.chars().map(escaped).collect()
 }
 
 /// Shows what the argument parser has to say: help and version are results, the rest are complaints.

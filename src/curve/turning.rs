@@ -82,7 +82,9 @@ impl Curve {
     /// Value at a turning point within 1e−11; a rise or fall of less than 5e−10 may be left out.
     pub fn turning_points(&self) -> TurningPoints {
         let mut found = TurningPoints { x: [0.0; MOST], len: 0 };
-        if self.swing() < FLAT {
+        let swing = self.swing();
+        // a function that gives no number would be halved without end
+        if swing < FLAT || !swing.is_finite() {
             return found;
         }
         let bounds = Bounds::of(self);
@@ -153,8 +155,8 @@ impl Curve {
             }
             let next = x - slope / bend;
             let next = if next >= low && next <= high { next } else { f64::midpoint(low, high) };
-            // the value errs by half the bend times the square of this
-            if (next - x).abs() < 1e-7 {
+            // the next step would be of the order of this one's square, and the value errs by that squared again
+            if (next - x).abs() < 1e-4 {
                 return next;
             }
             x = next;
@@ -166,10 +168,12 @@ impl Curve {
 #[cfg(test)]
 mod tests {
     use crate::curve::{Bandwidth, Curve};
+    use crate::units::Four;
 
     fn turns(f: impl Fn(f64) -> f64, band: f64, end: f64) -> Vec<(f64, f64)> {
         let band = Bandwidth { body_rad_s: band, path_rad_s: 0.0 };
-        let curve = Curve::through(0.0, end, band, f).unwrap();
+        let each = |t: Four| Four::from(t.to_array().map(&f));
+        let curve = Curve::through(0.0, end, band, each).unwrap();
         curve.turns(&curve.turning_points()).collect()
     }
 
@@ -188,6 +192,12 @@ mod tests {
         let found = turns(|t| 0.4 * (t.sin() + t * (1.0 - 1e-6)) / 4.0, 1.0, 6.0);
         assert_eq!(found.len(), 2, "{found:?}");
         assert!(found[1].0 - found[0].0 < 0.003);
+    }
+
+    #[test]
+    fn a_function_that_gives_no_number_ends_the_search() {
+        assert!(turns(|_| f64::NAN, 7.3e-5, 40_000.0).is_empty());
+        assert!(turns(|t| if t > 1e4 { f64::INFINITY } else { 0.5 }, 7.3e-5, 40_000.0).is_empty());
     }
 
     #[test]

@@ -76,7 +76,7 @@ impl Draft {
         }
         check_order(&self.waypoints, takeoff, landing.value)
             .map_err(|(origin, problem)| fail(&origin, problem))?;
-        let name = self.name.filter(|name| !name.trim().is_empty());
+        let name = self.name.filter(|name| name.chars().any(|c| !c.is_whitespace() && !c.is_control()));
         let (from, to) = (stop(self.from), stop(self.to));
         let name = name.unwrap_or_else(|| {
             format!("{}-{} {}", from.label, to.label, takeoff.utc().format("%Y-%m-%d %H%MZ"))

@@ -15,8 +15,10 @@ pub(super) const FIELDS: [&str; 10] =
     ["name", "from", "to", "takeoff", "landing", "airborne", "level_ft", "dut1_s", "waypoint", "polar_areas"];
 /// What a waypoint may hold.
 pub(super) const WAYPOINT_FIELDS: [&str; 2] = ["at", "time"];
-const PLACE_FIELDS: [&str; 2] = ["lat", "lon"];
-const POLAR_FIELDS: [&str; 2] = ["north_deg", "south_deg"];
+/// What a place in degrees must hold.
+pub(super) const PLACE_FIELDS: [&str; 2] = ["lat", "lon"];
+/// What the limits of the polar areas may hold.
+pub(super) const POLAR_FIELDS: [&str; 2] = ["north_deg", "south_deg"];
 
 /// A value of the file or what is wrong with it, with the bytes it stands on.
 type Found<T> = Result<T, (Range<usize>, Problem)>;
@@ -30,6 +32,10 @@ pub fn flight_file(text: &str, source_name: &str) -> Result<Flight, IntakeError>
     let fail = |origin, problem| IntakeError { source_name: source_name.to_string(), origin, problem };
     if text.trim().is_empty() {
         return Err(fail(Origin::Whole, Problem::Empty));
+    }
+    // UTF-16 of plain letters is valid UTF-8, but with zeros between them
+    if let Some(byte) = text.find('\0') {
+        return Err(fail(Origin::Whole, Problem::NotText(byte)));
     }
     let parsed = DeTable::parse(text).map_err(|error| {
         let origin = error.span().map_or(Origin::Whole, |span| line_and_column(text, span.start));
@@ -154,7 +160,7 @@ fn wrong(
 /// Refuses fields that are not known, so that a misspelt one is not passed over in silence.
 fn only(table: &DeTable<'_>, known: &[&str]) -> Found<()> {
     match table.keys().find(|key| !known.contains(&key.get_ref().as_ref())) {
-        Some(key) => Err((key.span(), Problem::UnknownField(key.get_ref().chars().take(40).collect()))),
+        Some(key) => Err((key.span(), Problem::UnknownField(key.get_ref().to_string()))),
         None => Ok(()),
     }
 }
@@ -171,7 +177,7 @@ fn number(field: &'static str, value: &Value<'_>) -> Found<f64> {
     let text = match value.get_ref() {
         DeValue::Float(float) => float.as_str().to_string(),
         DeValue::Integer(integer) if integer.radix() == 10 => integer.as_str().to_string(),
-        other => return Err(wrong(field, other, "a number", value.span())),
+        other => return Err(wrong(field, other, "a decimal number", value.span())),
     };
     // a NaN is a number to TOML but not to us: every range refuses it later, with its name
     text.parse().map_err(|_| wrong(field, value.get_ref(), "a number", value.span()))

@@ -30,6 +30,11 @@ pub struct Inline<'a> {
 /// # Errors
 /// Anything that keeps the flight from being flown, with the option it was given in.
 pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
+    if given.airborne.is_none() && given.landing.is_none() {
+        let problem = Problem::Landing("neither says when the flight ends");
+        let origin = Origin::Option("--airborne, --landing");
+        return Err(IntakeError { source_name: String::new(), origin, problem });
+    }
     let draft = Draft {
         source_name: String::new(),
         name: given.name.map(str::to_string),

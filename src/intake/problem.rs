@@ -1,8 +1,12 @@
 //! What can be wrong with a flight as it was given, where it stands, and the cure.
 
 use super::draft::Origin;
+use super::file::{FIELDS, PLACE_FIELDS, POLAR_FIELDS, WAYPOINT_FIELDS};
 use crate::places::UnknownAerodrome;
 use crate::units::{Dut1Error, PlaceError, YEARS};
+
+/// What was given is quoted up to this length.
+const LONGEST_QUOTED: usize = 40;
 
 /// Something is wrong with a flight as it was given.
 #[derive(Debug, Clone, PartialEq, thiserror::Error)]
@@ -27,7 +31,7 @@ impl IntakeError {
 #[derive(Debug, Clone, PartialEq, thiserror::Error)]
 pub enum Problem {
     /// Not TOML.
-    #[error("{0}")]
+    #[error("cannot be read as TOML: {0}")]
     Toml(String),
     /// Nothing in it.
     #[error("the file is empty")]
@@ -36,7 +40,7 @@ pub enum Problem {
     #[error("the file is not UTF-8 text (byte {0})")]
     NotText(usize),
     /// A field that is not known.
-    #[error("unknown field '{0}'")]
+    #[error("unknown field {}", quoted(.0))]
     UnknownField(String),
     /// A field that must be there.
     #[error("the field '{0}' is missing")]
@@ -61,22 +65,22 @@ pub enum Problem {
     #[error(transparent)]
     UnknownAerodrome(UnknownAerodrome),
     /// Coordinates that cannot be read.
-    #[error("'{0}' is no coordinate pair")]
+    #[error("{} is no coordinate pair", quoted(.0))]
     Coordinates(String),
     /// A time that cannot be read.
-    #[error("'{0}' is no date and time")]
+    #[error("{} is no date and time", quoted(.0))]
     Instant(String),
     /// A time without an offset.
-    #[error("'{0}' says no offset from UTC")]
+    #[error("{} says no offset from UTC", quoted(.0))]
     NoOffset(String),
     /// A time outside the years served.
-    #[error("{given} is outside the years {first} to {last}", first = YEARS.start(), last = YEARS.end())]
+    #[error("{} is outside the years {first} to {last}", quoted(given), first = YEARS.start(), last = YEARS.end())]
     Years {
         /// As given.
         given: String,
     },
     /// A duration that cannot be read.
-    #[error("'{0}' is no duration")]
+    #[error("{} is no duration", quoted(.0))]
     Duration(String),
     /// Neither or both of two fields.
     #[error("{0}")]
@@ -142,6 +146,22 @@ pub enum Problem {
     Level(f64),
 }
 
+/// A text as given, in quotes, cut short, with everything escaped that could act on a terminal.
+fn quoted(given: &str) -> String {
+    let mut text = String::new();
+    for c in given.chars().take(LONGEST_QUOTED) {
+        if matches!(c, '\'' | '"') {
+            text.push(c);
+        } else {
+            text.extend(c.escape_debug());
+        }
+    }
+    if given.chars().nth(LONGEST_QUOTED).is_some() {
+        text.push('…');
+    }
+    format!("'{text}'")
+}
+
 impl Problem {
     fn hint(&self) -> Option<String> {
         let text = match self {
@@ -151,7 +171,7 @@ impl Problem {
                 "write 2026-12-18T05:10Z, or 2026-12-18T00:10-05:00 with an offset"
             }
             Self::Duration(_) => "write 14h55m, 14h or 55m",
-            Self::NotText(_) => "a flight file is TOML in UTF-8; save it as UTF-8 without a byte-order mark",
+            Self::NotText(_) => "a flight file is TOML in UTF-8: save it as UTF-8, not as UTF-16",
             Self::Empty => "a flight file needs at least from, to, takeoff, and airborne or landing",
             Self::UnknownField(field) => return near_field(field),
             Self::Landing(_) => "give one of airborne = \"14h55m\" and landing = 2026-12-18T20:05:00Z",
@@ -170,12 +190,20 @@ fn unknown_place_hint(unknown: &UnknownAerodrome) -> Option<String> {
     unknown.hint()
 }
 
-/// The known field that a misspelt one shares most letters' pairs with.
+/// The known field that a misspelt one shares all letters or most letters' pairs with.
 fn near_field(field: &str) -> Option<String> {
-    let known = super::file::FIELDS.iter().chain(&super::file::WAYPOINT_FIELDS);
+    let known = [&FIELDS[..], &WAYPOINT_FIELDS, &PLACE_FIELDS, &POLAR_FIELDS].concat();
+    let lower = field.to_ascii_lowercase();
+    let letters = |word: &str| {
+        let mut bytes = word.as_bytes().to_vec();
+        bytes.sort_unstable();
+        bytes
+    };
     let pairs = |word: &str| word.as_bytes().windows(2).map(<[u8]>::to_vec).collect::<Vec<_>>();
-    let given = pairs(&field.to_ascii_lowercase());
+    let given = pairs(&lower);
     let shared = |word: &str| pairs(word).iter().filter(|pair| given.contains(pair)).count();
-    let best = known.max_by_key(|word| shared(word))?;
-    (shared(best) * 2 >= best.len() - 1).then(|| format!("did you mean '{best}'?"))
+    let exchanged = known.iter().find(|word| letters(word) == letters(&lower));
+    let alike =
+        || known.iter().max_by_key(|word| shared(word)).filter(|best| shared(best) * 2 >= best.len() - 1);
+    exchanged.or_else(alike).map(|best| format!("did you mean '{best}'?"))
 }

@@ -16,7 +16,10 @@ pub(super) fn instant(text: &str) -> Result<Instant, Problem> {
 
 /// `2026-12-18 05:10Z` as RFC 3339 writes it.
 fn with_seconds(text: &str) -> String {
-    let (Some(date), Some(time)) = (text.get(..10), text.get(11..)) else { return text.to_string() };
+    let (Some(date), Some("T" | "t" | " "), Some(time)) = (text.get(..10), text.get(10..11), text.get(11..))
+    else {
+        return text.to_string();
+    };
     let clock = time.find(['Z', 'z', '+', '-']).unwrap_or(time.len());
     let seconds = if time[..clock].matches(':').count() == 1 { ":00" } else { "" };
     format!("{date}T{}{seconds}{}", &time[..clock], &time[clock..])
@@ -77,7 +80,9 @@ mod tests {
         assert!(matches!(instant("tomorrow"), Err(Problem::Instant(_))));
         assert!(matches!(instant("2026-13-18T05:10Z"), Err(Problem::Instant(_))));
         assert!(matches!(instant("1900-01-01T00:00Z"), Err(Problem::Years { .. })));
+        assert!(matches!(instant("2026-12-18-05:10Z"), Err(Problem::Instant(_))));
         assert!(matches!(instant("2026-12-1\u{661}é05:10Z"), Err(Problem::Instant(_))));
+        assert!(matches!(instant("2100-01-01T00:00Z"), Err(Problem::Years { .. })));
     }
 
     #[test]

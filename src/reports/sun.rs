@@ -49,10 +49,7 @@ pub fn sun_text(brief: &SunBrief) -> String {
 }
 
 fn cautions(brief: &SunBrief) -> Vec<String> {
-    let ut1 = format!(
-        "UT1 − UTC is taken as {} s; it may be up to 0.9 s either way, 13.5″ of hour angle.",
-        brief.dut1_s
-    );
+    let ut1 = super::caution::ut1(brief.dut1_s);
     if brief.here.is_none() {
         vec![ut1]
     } else {

@@ -36,7 +36,7 @@ pub(super) fn apparent(tt_days: f64) -> Apparent {
 
 /// Geocentric direction of the Sun when its light left, distance in au, and the Earth's velocity in units of light's.
 fn natural(tt_days: f64) -> ([f64; 3], f64, [f64; 3]) {
-    // the routine's only refusal is a warning for dates outside 1900–2100, which the door has turned away
+    // the routine refuses dates more than a hundred Julian years from J2000.0, which the door has turned away
     let (heliocentric, barycentric) = epv00(J2000, tt_days).unwrap_or_default();
     let delay = norm(heliocentric[0]) / LIGHT_AU_PER_DAY;
     let sun_as_left = std::array::from_fn(|i| {

@@ -1,7 +1,7 @@
 //! The Sun against an observer's horizontal plane, topocentric on the WGS84 ellipsoid at height zero.
 
 use super::sun::{AU_M, SunPlace};
-use crate::units::{Angle, Place, Vector, dot, wgs84};
+use crate::units::{Angle, Lane, Place, Vector, dot, wgs84};
 
 /// The geometric (airless) elevation of a body's centre above the horizontal plane.
 #[derive(Debug, Clone, Copy, PartialEq, PartialOrd)]
@@ -21,20 +21,20 @@ const SPIN_PER_AU: f64 = 7.292_115e-5 * 499.004_784;
 /// The place under a normal is N (n_x, n_y, (1 − e²) n_z) with N = a / √(1 − e² n_z²) (any text on geodesy, e.g.
 /// EPSG Guidance Note 7-2, section 4.1.1).
 #[inline]
-pub fn sine_of_elevation(normal: Vector, sun: &SunPlace) -> f64 {
-    let n_z2 = normal[2] * normal[2];
-    let w = (1.0 - wgs84::E2 * n_z2).sqrt();
-    let radius_au = wgs84::A_M / AU_M / w;
+pub fn sine_of_elevation<L: Lane>(normal: [L; 3], sun: &SunPlace<L>) -> L {
+    let [one, two] = [1.0, 2.0].map(L::splat);
     let [x, y, z] = normal;
-    let place = [radius_au * x, radius_au * y, radius_au * (1.0 - wgs84::E2) * z];
+    let w = (one - L::splat(wgs84::E2) * z * z).root();
+    let radius_au = L::splat(wgs84::A_M / AU_M) / w;
+    let place = [radius_au * x, radius_au * y, radius_au * L::splat(1.0 - wgs84::E2) * z];
     let d = sun.distance_au;
     let towards_sun = dot(place, sun.direction);
-    let range = (d * (d - 2.0 * towards_sun) + dot(place, place)).sqrt();
+    let range = (d * (d - two * towards_sun) + dot(place, place)).root();
     // the observer moves eastward, level, so that aberration draws the direction along without lifting it: the sine
     // shrinks as the vector is brought back to unit length
-    let eastward = SPIN_PER_AU * (place[0] * sun.direction[1] - place[1] * sun.direction[0]);
+    let eastward = L::splat(SPIN_PER_AU) * (place[0] * sun.direction[1] - place[1] * sun.direction[0]);
     // n·P is N (1 − e² n_z²), the distance of the tangent plane from the centre
-    (d * dot(normal, sun.direction) - radius_au * w * w) / range * (1.0 - eastward)
+    (d * dot(normal, sun.direction) - radius_au * w * w) / range * (one - eastward)
 }
 
 /// The Sun's geometric elevation at a place.

@@ -9,7 +9,7 @@ use super::model::apparent;
 use super::sun::SunPlace;
 use super::time::tt_minus_utc_s;
 use crate::curve::{coefficients, lobatto};
-use crate::units::{Dut1, Instant};
+use crate::units::{Dut1, Instant, Lane};
 use std::f64::consts::TAU;
 use std::sync::OnceLock;
 
@@ -19,10 +19,13 @@ const TERMS: usize = 9;
 const PIECE_DAYS: f64 = 8.0;
 /// Days of margin on each side of a piece: half the longest interval that is certain to lie in one piece.
 const MARGIN_DAYS: f64 = 1.0;
-/// TT days since J2000.0 of the first piece's beginning, before 1973.
-const FIRST_DAY: f64 = -9864.0;
-/// Pieces that reach past the end of 2100.
-const PIECES: usize = 5848;
+/// The last TT day since J2000.0 that the ephemeris is stated for, noon of 1 January 2100; the last piece's margin ends
+/// there and must not go beyond.
+const LAST_DAY: f64 = 36_525.0;
+/// Pieces from before 1973 to the last day.
+const PIECES: usize = 5799;
+/// TT days since J2000.0 of the first piece's beginning.
+const FIRST_DAY: f64 = LAST_DAY - MARGIN_DAYS - PIECES as f64 * PIECE_DAYS;
 
 /// Earth rotation angle in turns at J2000.0 UT1 and its excess over a turn a day (IAU 2000 resolution B1.8).
 const ROTATION_AT_J2000: f64 = 0.779_057_273_264_0;
@@ -34,7 +37,7 @@ struct Piece {
     terms: [[f64; 4]; TERMS],
 }
 
-/// The tabulated sky, from 1973 to 2100, each piece built when first asked for and then shared by all threads.
+/// The tabulated sky, from 1973 to 2099, each piece built when first asked for and then shared by all threads.
 ///
 /// # Accuracy
 /// Within 0.001″ of the model it tabulates, and that within 0.022″ of JPL DE421 (`tests/tables/skyfield-de421`).
@@ -104,9 +107,12 @@ impl SunWindow<'_> {
     }
 
     /// The Sun's place, so many seconds after the window's beginning.
-    pub fn at(&self, seconds: f64) -> SunPlace {
-        let [x, y, z, distance_au] = self.piece.at(self.x_at_begin + seconds * self.x_per_s);
-        let (sin, cos) = (self.angle_at_begin + seconds * super::MEAN_SUN_RAD_S).sin_cos();
+    #[inline]
+    pub fn at<L: Lane>(&self, seconds: L) -> SunPlace<L> {
+        let [x, y, z, distance_au] =
+            self.piece.at(L::splat(self.x_at_begin) + seconds * L::splat(self.x_per_s));
+        let angle = L::splat(self.angle_at_begin) + seconds * L::splat(super::MEAN_SUN_RAD_S);
+        let (sin, cos) = angle.sine_cosine();
         SunPlace { direction: [cos * x + sin * y, cos * y - sin * x, z], distance_au }
     }
 }
@@ -136,14 +142,15 @@ impl Piece {
     }
 
     /// Clenshaw's sum for the four series at once.
-    fn at(&self, x: f64) -> [f64; 4] {
-        let (mut b1, mut b2) = ([0.0; 4], [0.0; 4]);
-        let twice = 2.0 * x;
+    #[inline]
+    fn at<L: Lane>(&self, x: L) -> [L; 4] {
+        let (mut b1, mut b2) = ([L::splat(0.0); 4], [L::splat(0.0); 4]);
+        let twice = L::splat(2.0) * x;
         for term in self.terms[1..].iter().rev() {
-            let b0 = std::array::from_fn(|i| twice * b1[i] + (term[i] - b2[i]));
+            let b0 = std::array::from_fn(|i| twice * b1[i] + (L::splat(term[i]) - b2[i]));
             (b1, b2) = (b0, b1);
         }
-        std::array::from_fn(|i| x * b1[i] + (self.terms[0][i] - b2[i]))
+        std::array::from_fn(|i| x * b1[i] + (L::splat(self.terms[0][i]) - b2[i]))
     }
 }
 

@@ -4,9 +4,9 @@
 
 use chrono::{DateTime, Datelike, Utc};
 
-/// The first and last calendar year (UTC) that is answered for: leap seconds are whole from 1972, and the IAU series
-/// and the ephemeris are stated for 1900 to 2100.
-pub const YEARS: std::ops::RangeInclusive<i32> = 1973..=2100;
+/// The first and last calendar year (UTC) that is answered for: leap seconds are whole from 1972, and the ephemeris ends
+/// a hundred Julian years after J2000.0, at noon of 1 January 2100.
+pub const YEARS: std::ops::RangeInclusive<i32> = 1973..=2099;
 
 /// An instant of UTC: seconds since 2000-01-01 12:00:00 UTC in days of 86,400 s.
 ///
@@ -69,7 +69,7 @@ mod tests {
     fn years_outside_the_span_are_not_answered_for() {
         let at = |text: &str| Instant::from_utc(text.parse::<DateTime<Utc>>().unwrap()).is_answered_for();
         assert!(!at("1972-12-31T23:59:59Z") && at("1973-01-01T00:00:00Z"));
-        assert!(at("2100-12-31T23:59:59Z") && !at("2101-01-01T00:00:00Z"));
+        assert!(at("2099-12-31T23:59:59Z") && !at("2100-01-01T00:00:00Z"));
     }
 
     #[test]
