@@ -38,22 +38,55 @@ const ON_CURVE: f64 = 220.0;
 const ON_POINT: f64 = 400.0;
 const ON_LINK: f64 = 300.0;
 const LINKS_CROSS: f64 = 260.0;
+const LINK_ON_CURVE: f64 = 40.0;
+const UNSET: f64 = 1e5;
+/// A link may run along the curve so far from its point.
+const CLEAR: f64 = 9.0;
 
 /// Sets labels beside their points; `None` where no room was found.
 ///
 /// Boxes that are set never overlap, keep a gap and stay within the bounds. Links from point to box are kept from
 /// crossing labels and each other where that is possible. The same wishes give the same places.
 pub fn beside(wanted: &[Wanted], ground: &Ground<'_>) -> Vec<Option<Rect>> {
-    let mut set: Vec<Option<Rect>> = vec![None; wanted.len()];
-    for _ in 0..ROUNDS {
-        for index in 0..wanted.len() {
-            set[index] = best(index, wanted, &set, ground);
+    let mut best: Option<(f64, Vec<Option<Rect>>)> = None;
+    for order in orders(wanted) {
+        let (cost, set) = set_in(&order, wanted, ground);
+        if best.as_ref().is_none_or(|(least, _)| cost < *least) {
+            best = Some((cost, set));
         }
     }
-    set
+    best.map_or_else(Vec::new, |(_, set)| set)
 }
 
-fn best(index: usize, wanted: &[Wanted], set: &[Option<Rect>], ground: &Ground<'_>) -> Option<Rect> {
+/// The orders in which labels are tried: who comes first takes the best place, and it depends on the curve whose that
+/// should be.
+fn orders(wanted: &[Wanted]) -> Vec<Vec<usize>> {
+    let forwards: Vec<usize> = (0..wanted.len()).collect();
+    let mut downwards = forwards.clone();
+    downwards.sort_by(|&a, &b| wanted[a].anchor.y.total_cmp(&wanted[b].anchor.y));
+    let reversed = |order: &[usize]| order.iter().rev().copied().collect();
+    vec![reversed(&forwards), reversed(&downwards), downwards, forwards]
+}
+
+/// Sets labels in an order and says what it costs.
+fn set_in(order: &[usize], wanted: &[Wanted], ground: &Ground<'_>) -> (f64, Vec<Option<Rect>>) {
+    let mut set: Vec<Option<Rect>> = vec![None; wanted.len()];
+    let mut costs = vec![UNSET; wanted.len()];
+    for _ in 0..ROUNDS {
+        let before = set.clone();
+        for &index in order {
+            let found = best(index, wanted, &set, ground);
+            costs[index] = found.map_or(UNSET, |(cost, _)| cost);
+            set[index] = found.map(|(_, rect)| rect);
+        }
+        if set == before {
+            break;
+        }
+    }
+    (costs.iter().sum(), set)
+}
+
+fn best(index: usize, wanted: &[Wanted], set: &[Option<Rect>], ground: &Ground<'_>) -> Option<(f64, Rect)> {
     let own = wanted[index];
     let others: Vec<Other> = (0..wanted.len())
         .filter(|&i| i != index)
@@ -77,7 +110,7 @@ fn best(index: usize, wanted: &[Wanted], set: &[Option<Rect>], ground: &Ground<'
             }
         }
     }
-    best.map(|(_, rect)| rect)
+    best
 }
 
 struct Other {
@@ -122,8 +155,15 @@ fn faults(rect: Rect, anchor: Point, others: &[Other], curve: &[Point]) -> f64 {
             cost += LINKS_CROSS;
         }
     }
-    // along a long link the curve may be met again
-    if distance > 60.0 { cost + distance * 0.2 } else { cost }
+    if distance > CLEAR {
+        // the link begins on the curve and should not meet it again
+        let share = CLEAR / distance;
+        let begin = anchor.moved((end.x - anchor.x) * share, (end.y - anchor.y) * share);
+        let again = near(curve, begin.x.min(end.x), begin.x.max(end.x));
+        let times = again.windows(2).filter(|w| cross([begin, end], [w[0], w[1]])).count();
+        cost += LINK_ON_CURVE * times as f64;
+    }
+    cost
 }
 
 fn meets_point(rect: Rect, point: Point) -> bool {
@@ -131,9 +171,14 @@ fn meets_point(rect: Rect, point: Point) -> bool {
 }
 
 fn on_curve(rect: Rect, curve: &[Point]) -> bool {
-    let first = curve.partition_point(|p| p.x < rect.left).saturating_sub(1);
-    let last = (curve.partition_point(|p| p.x <= rect.right) + 1).min(curve.len());
-    curve.get(first..last).is_some_and(|near| near.windows(2).any(|w| meets(rect, [w[0], w[1]])))
+    near(curve, rect.left, rect.right).windows(2).any(|w| meets(rect, [w[0], w[1]]))
+}
+
+/// The part of the curve that covers a stretch from left to right.
+fn near(curve: &[Point], left: f64, right: f64) -> &[Point] {
+    let first = curve.partition_point(|p| p.x < left).saturating_sub(1);
+    let last = (curve.partition_point(|p| p.x <= right) + 1).min(curve.len());
+    curve.get(first..last).unwrap_or_default()
 }
 
 #[cfg(test)]

@@ -3,9 +3,11 @@
 //! Knows nothing of what the labels say or of what a chart shows.
 
 mod boxes;
+mod apart;
 mod beside;
 mod flags;
 
+pub use apart::apart;
 pub use beside::{Ground, Wanted, beside};
 pub use boxes::{link, overlap};
 pub use flags::{Flag, Mast, flags};

@@ -6,6 +6,7 @@ use super::frame::Frame;
 use super::layout::{MARGIN, RIGHT};
 use super::style::{INK, MUTED, RULE, SMALL, TEXT, fitted, letters, look};
 use crate::charts::canvas::{Across, Canvas, Dash, Level, Look, Point, Rect, Stroke, TextStyle, Turn};
+use crate::charts::labels::apart;
 use crate::label::words::{limit_elevation, spoken, state_key};
 use crate::light::{Limit, State};
 
@@ -43,7 +44,7 @@ pub(super) fn draw(canvas: &mut Canvas, frame: &Frame) {
     for limit in Limit::ALL {
         let deg = limit.elevation().deg();
         if frame.span.holds(deg) {
-            canvas.line(&level(frame.y(deg)), Stroke::new(INK, 1.2).dashed(Dash::Dashed(9.0, 4.0)));
+            canvas.line(&level(frame.y(deg)), Stroke::new(INK, 1.0).dashed(Dash::Dashed(9.0, 4.0)));
         }
     }
 }
@@ -75,26 +76,12 @@ fn limits(canvas: &mut Canvas, frame: &Frame) {
     let ys: Vec<f64> = shown.iter().map(|l| frame.y(l.elevation().deg())).collect();
     let style = letters(TEXT).bold().anchored(Across::Start, Level::Middle);
     let right = frame.plot.right;
-    for ((limit, &y), label_y) in shown.iter().zip(&ys).zip(apart(&ys, LABEL_ROOM, frame.plot)) {
+    let edge = (frame.plot.top, frame.plot.bottom - LABEL_ROOM / 2.0);
+    for ((limit, &y), label_y) in shown.iter().zip(&ys).zip(apart(&ys, LABEL_ROOM, edge)) {
         let lead = [Point::new(right, y), Point::new(right + 4.0, y), Point::new(right + 10.0, label_y)];
         canvas.line(&lead, Stroke::new(INK, 1.0));
         canvas.text(limit_elevation(*limit), Point::new(right + 13.0, label_y), &style);
     }
-}
-
-/// Heights from top to bottom, each at least `room` below the one before and all within the plot's sides.
-fn apart(ys: &[f64], room: f64, plot: Rect) -> Vec<f64> {
-    let mut apart: Vec<f64> = ys.to_vec();
-    // a limit keeps its place unless the one above it needs the room; what runs out below is pushed back up
-    for i in 1..apart.len() {
-        apart[i] = apart[i].max(apart[i - 1] + room);
-    }
-    let mut floor = plot.bottom - room / 2.0;
-    for y in apart.iter_mut().rev() {
-        *y = y.min(floor);
-        floor = *y - room;
-    }
-    apart
 }
 
 /// The states' names at the right edge, in bands that have room.
@@ -113,22 +100,6 @@ fn names(canvas: &mut Canvas, frame: &Frame) {
         for (i, line) in lines.iter().enumerate() {
             let y = middle + NAME_LINE * (i as f64 - (lines.len() - 1) as f64 / 2.0);
             canvas.text(&fitted(line, &style, RIGHT - x + MARGIN / 2.0), Point::new(x, y), &style);
-        }
-    }
-}
-
-#[cfg(test)]
-mod tests {
-    use super::apart;
-    use crate::charts::canvas::Rect;
-
-    #[test]
-    fn limits_that_lie_close_are_moved_apart_within_the_plot() {
-        let plot = Rect { left: 0.0, top: 0.0, right: 1.0, bottom: 300.0 };
-        for ys in [[10.0, 12.0, 14.0, 16.0], [270.0, 280.0, 290.0, 299.0], [10.0, 100.0, 200.0, 290.0]] {
-            let apart = apart(&ys, 19.0, plot);
-            assert!(apart.windows(2).all(|w| w[1] - w[0] >= 19.0 - 1e-9), "{apart:?}");
-            assert!(apart[3] <= 300.0 && apart[0] >= 0.0);
         }
     }
 }

@@ -38,20 +38,19 @@ pub(super) struct Clock {
 }
 
 impl Clock {
-    /// The clocks of a flight: UTC, then those whose zones are known; ends of one zone share a clock.
+    /// The clocks of a flight: UTC, then those whose zones are known; two that show the same share an axis.
     pub(super) fn of(brief: &Brief) -> Vec<Self> {
-        let (from, to) = (&brief.flight.from, &brief.flight.to);
-        let mut clocks = vec![Self::new(brief, "UTC".to_string(), Tz::UTC)];
-        match (from.zone, to.zone) {
-            (Some(one), Some(other)) if one == other => {
-                clocks.push(Self::new(brief, format!("{}, {}", from.label, to.label), one));
-            }
-            _ => {
-                let known = [from, to].into_iter().filter_map(|stop| Some((stop.label.clone(), stop.zone?)));
-                clocks.extend(known.map(|(label, zone)| Self::new(brief, label, zone)));
-            }
+        let ends = [&brief.flight.from, &brief.flight.to];
+        let known = ends.into_iter().filter_map(|stop| Some((&stop.label, stop.zone?)));
+        let mut local: Vec<Self> = known.map(|(label, zone)| Self::new(brief, label.clone(), zone)).collect();
+        if let [from, to] = &local[..]
+            && (&from.note, &from.ticks, &from.changes_s) == (&to.note, &to.ticks, &to.changes_s)
+        {
+            local[0].name = format!("{}, {}", from.name, to.name);
+            local.pop();
         }
-        clocks
+        local.insert(0, Self::new(brief, "UTC".to_string(), Tz::UTC));
+        local
     }
 
     fn new(brief: &Brief, name: String, zone: Tz) -> Self {
@@ -62,7 +61,7 @@ impl Clock {
         } else {
             let later = changes_s.iter().map(|&s| offset(takeoff.after_s(s), zone));
             let offsets: Vec<String> = std::iter::once(offset(takeoff, zone)).chain(later).collect();
-            let offsets = offsets.join("→").replace("→UTC", "→");
+            let offsets = offsets.join("/").replace("/UTC", "/");
             format!("{offsets} · {}", day_in(takeoff, zone))
         };
         Self { name, note, ticks: ticks(takeoff, airborne_s, zone), changes_s }
@@ -73,7 +72,8 @@ impl Clock {
         let (left, right) = (frame.plot.left, frame.plot.right);
         canvas.line(&[Point::new(left, top + 2.0), Point::new(right, top + 2.0)], Stroke::new(INK, 1.0));
         let name = letters(TEXT).bold();
-        let room = left - MARGIN - 14.0;
+        // a tick at the very left reaches so far out
+        let room = left - MARGIN - 26.0;
         canvas.text(&fitted(&self.name, &name, room), Point::new(MARGIN, top + 15.0), &name);
         let note = TextStyle { ink: MUTED, ..letters(SMALL) };
         canvas.text(&fitted(&self.note, &note, room), Point::new(MARGIN, top + 33.0), &note);
@@ -162,17 +162,18 @@ mod tests {
     #[test]
     fn the_hour_that_a_clock_skips_has_no_tick() {
         // New York, 8 March 2026: 02:00 becomes 03:00 at 07:00 UTC
-        let takeoff = at("2026-03-08T04:30:00Z");
-        let ticks = ticks(takeoff, 8.0 * 3600.0, chrono_tz::America::New_York);
-        assert_eq!(minutes(&ticks), ["00:00", "01:00", "03:00", "04:00", "05:00", "06:00", "07:00", "08:00"]);
+        let (takeoff, airborne_s) = (at("2026-03-08T04:30:00Z"), 12.0 * 3600.0);
+        let ticks = ticks(takeoff, airborne_s, chrono_tz::America::New_York);
+        assert_eq!(minutes(&ticks)[..5], ["00:00", "01:00", "03:00", "04:00", "05:00"]);
+        assert!(ticks.windows(2).all(|w| w[1].at_s - w[0].at_s == 3600.0), "{ticks:?}");
         assert_eq!(ticks[0].day.as_deref(), Some("8 Mar"));
-        assert_eq!(changes(takeoff, 8.0 * 3600.0, chrono_tz::America::New_York), [2.5 * 3600.0]);
+        assert_eq!(changes(takeoff, airborne_s, chrono_tz::America::New_York), [2.5 * 3600.0]);
     }
 
     #[test]
     fn a_zone_of_odd_quarters_has_its_own_round_hours() {
-        let ticks = ticks(at("2026-12-18T16:00:00Z"), 3.0 * 3600.0, chrono_tz::Asia::Kathmandu);
-        assert!(minutes(&ticks).contains(&"00:00") && minutes(&ticks).contains(&"22:00"), "{ticks:?}");
+        let ticks = ticks(at("2026-12-18T16:00:00Z"), 12.0 * 3600.0, chrono_tz::Asia::Kathmandu);
+        assert_eq!(minutes(&ticks)[..3], ["22:00", "23:00", "00:00"]);
         let days: Vec<f64> = ticks.iter().filter(|t| t.day.is_some()).map(|t| t.at_s).collect();
         assert_eq!(days, [2.25 * 3600.0]);
     }

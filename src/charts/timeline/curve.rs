@@ -11,7 +11,8 @@ use crate::light::Sample;
 /// The curve's points in order of time: each minute, and all instants that must lie on it exactly.
 pub(super) fn points(brief: &Brief) -> Vec<Seen> {
     let seen = |sample: &Sample| Seen { at_s: sample.at_s, deg: sample.elevation.0.deg() };
-    let exact = brief.at_crossings.iter().chain(&brief.at_touches);
+    // the curve has corners at waypoints
+    let exact = brief.at_crossings.iter().chain(&brief.at_touches).chain(&brief.at_waypoints);
     let peaks = [&brief.at_highest, &brief.at_lowest];
     let mut points: Vec<Seen> = brief.minutes.iter().chain(exact).chain(peaks).map(seen).collect();
     points.sort_by(|a, b| a.at_s.total_cmp(&b.at_s));

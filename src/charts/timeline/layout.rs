@@ -9,8 +9,8 @@ pub(super) const HEIGHT_PX: u32 = 900;
 /// The outer margin, within which nothing is drawn.
 pub(super) const MARGIN: f64 = 28.0;
 /// The sides of the plot; clocks stand to its left and the names of the states to its right.
-pub(super) const PLOT_LEFT: f64 = 176.0;
-pub(super) const PLOT_RIGHT: f64 = 1412.0;
+pub(super) const PLOT_LEFT: f64 = 188.0;
+pub(super) const PLOT_RIGHT: f64 = 1420.0;
 /// The right edge of everything.
 pub(super) const RIGHT: f64 = WIDTH_PX as f64 - MARGIN;
 /// The line that the caution stands on.
@@ -20,20 +20,21 @@ pub(super) const FLAG_ROW: f64 = 21.0;
 const CLOCK_ROW: f64 = 43.0;
 pub(super) const KEY_ROW: f64 = 20.0;
 /// The end of the headings.
-const HEADING_BOTTOM: f64 = 104.0;
+const HEADING_BOTTOM: f64 = 108.0;
 const STRIP_HEIGHT: f64 = 28.0;
 
 /// What decides how high the plot can be.
 #[derive(Debug, Clone, Copy)]
 pub(super) struct Layout {
-    pub(super) flag_rows: usize,
+    /// What the flags take above the plot.
+    pub(super) flags_px: f64,
     pub(super) clocks: usize,
     pub(super) key_rows: usize,
 }
 
 impl Layout {
     pub(super) fn plot(&self) -> Rect {
-        let top = HEADING_BOTTOM + 8.0 + FLAG_ROW * self.flag_rows as f64;
+        let top = (HEADING_BOTTOM + 4.0 + self.flags_px).max(HEADING_BOTTOM + 16.0);
         let corner = Point::new(PLOT_RIGHT, self.strip().top - 8.0);
         Rect::spanned(Point::new(PLOT_LEFT, top), corner)
     }

@@ -38,7 +38,7 @@ pub fn timeline(brief: &Brief) -> Result<Canvas, CanvasError> {
     let span = Span::of(&curve);
     let gates = Gates::new(brief);
     let clocks = Clock::of(brief);
-    let roomy = Layout { flag_rows: gates.rows(), clocks: clocks.len(), key_rows: 0 };
+    let roomy = Layout { flags_px: gates.height_px(), clocks: clocks.len(), key_rows: 0 };
     let frame = |layout: &Layout| Frame { plot: layout.plot(), span, airborne_s: brief.path.airborne_s };
 
     let worded = Captions::worded(&events, &curve, &frame(&roomy));

@@ -56,7 +56,7 @@ mod tests {
                 .windows(2)
                 .map(|w| Segment { state: State::Daylight, begin_s: w[0], end_s: w[1] })
                 .collect();
-            let plot = Rect { left: 176.0, top: 100.0, right: 1412.0, bottom: 600.0 };
+            let plot = Rect { left: 188.0, top: 100.0, right: 1420.0, bottom: 600.0 };
             let span = Span { low_deg: -10.0, high_deg: 10.0 };
             let frame = Frame { plot, span, airborne_s: 70_000.0 };
             let cells = cells(&segments, plot, &frame);
