@@ -4,6 +4,7 @@
 
 mod house;
 mod tables;
+mod curve;
 mod places;
 mod sky;
 mod path;

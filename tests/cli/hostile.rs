@@ -22,7 +22,8 @@ const HOSTILE: [&str; 14] = [
 
 /// A name as a TOML string with everything escaped.
 fn toml_string(name: &str) -> String {
-    let escaped: String = name.chars().map(|c| format!("\\U{:08X}", u32::from(c))).collect();
+    let escaped: String =
+        name.chars().flat_map(|c| format!("\\U{:08X}", u32::from(c)).into_bytes()).map(char::from).collect();
     format!("\"{escaped}\"")
 }
 

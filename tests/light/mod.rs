@@ -1,6 +1,8 @@
 //! The light along flights.
 
 mod crossings;
+mod grazing;
+mod properties;
 
 use crate::tables::{Row, instant, number, rows};
 use gloamline::intake::{Flight, RoutePoint, Stop};
