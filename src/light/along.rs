@@ -33,16 +33,20 @@ pub struct Light {
 /// # Accuracy
 /// Crossing times within 0.05 s of the model's own, and none missed: see the room's promise.
 pub fn along(path: &Path, sky: &Sky) -> Light {
-    let trace = Trace::beneath(path, sky);
+    beneath(&Trace::beneath(path, sky), path.airborne_s)
+}
+
+/// The same from a trace that is at hand.
+pub fn beneath(trace: &Trace, airborne_s: f64) -> Light {
     let mut crossings = Vec::with_capacity(8);
     let mut touches = Vec::new();
     for limit in Limit::ALL {
-        meetings(&trace, limit, &mut crossings, &mut touches);
+        meetings(trace, limit.into(), &mut crossings, &mut touches);
     }
     crossings.sort_by(|a, b| a.at_s.total_cmp(&b.at_s));
     touches.sort_by(|a, b| a.at_s.total_cmp(&b.at_s));
     let at_takeoff = State::of_sine(trace.peaks()[0].sine);
-    let segments = segments(at_takeoff, &crossings, path.airborne_s);
+    let segments = segments(at_takeoff, &crossings, airborne_s);
     Light {
         seconds: StateSeconds::of(&segments),
         at_takeoff,

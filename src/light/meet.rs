@@ -35,6 +35,25 @@ pub struct Touch {
     pub margin: Angle,
 }
 
+/// A limit with the elevation that it has here: the four limits' own, or that of a horizon seen from a height.
+#[derive(Debug, Clone, Copy)]
+pub(super) struct Level {
+    pub(super) limit: Limit,
+    pub(super) elevation: Angle,
+}
+
+impl Level {
+    pub(super) fn sine(self) -> f64 {
+        self.elevation.rad().sin()
+    }
+}
+
+impl From<Limit> for Level {
+    fn from(limit: Limit) -> Self {
+        Self { limit, elevation: limit.elevation() }
+    }
+}
+
 /// On which side of a limit a peak lies, as far as can be told.
 #[derive(Clone, Copy, PartialEq, Eq)]
 enum Side {
@@ -44,12 +63,12 @@ enum Side {
 }
 
 /// Finds a limit's crossings and touches; appends both.
-pub(super) fn meetings(trace: &Trace, limit: Limit, crossings: &mut Vec<Crossing>, touches: &mut Vec<Touch>) {
-    let level = limit.sine();
+pub(super) fn meetings(trace: &Trace, at: Level, crossings: &mut Vec<Crossing>, touches: &mut Vec<Touch>) {
+    let (limit, level) = (at.limit, at.sine());
     let peaks = trace.peaks();
     let last = peaks.len() - 1;
     let strict = |i: usize| if peaks[i].sine >= level { Side::Above } else { Side::Below };
-    let margin = TOUCH.rad() * limit.elevation().rad().cos();
+    let margin = TOUCH.rad() * at.elevation.rad().cos();
     let side = |i: usize| match (peaks[i].sine - level).abs() < margin && i > 0 && i < last {
         true => Side::Undecided,
         false => strict(i),
@@ -61,7 +80,7 @@ pub(super) fn meetings(trace: &Trace, limit: Limit, crossings: &mut Vec<Crossing
         }
         if side(from) == side(to) {
             // a run of undecided peaks between two on one side: the one nearest to the far side is the touch
-            touches.extend(touch(&peaks[from..=to], limit, level));
+            touches.extend(touch(&peaks[from..=to], at));
         } else {
             let before = (from..to).find(|&i| strict(i) != strict(i + 1)).unwrap_or(from);
             let direction = if side(to) == Side::Above { Direction::Rising } else { Direction::Setting };
@@ -72,12 +91,13 @@ pub(super) fn meetings(trace: &Trace, limit: Limit, crossings: &mut Vec<Crossing
 }
 
 /// The touch within a run of peaks whose ends lie on one side, if there are peaks between them.
-fn touch(run: &[Peak], limit: Limit, level: f64) -> Option<Touch> {
+fn touch(run: &[Peak], at: Level) -> Option<Touch> {
+    let level = at.sine();
     let inner = run.get(1..run.len() - 1)?;
     let from_above = run[0].sine >= level;
     let deepest =
         |a: &&Peak, b: &&Peak| if from_above { a.sine.total_cmp(&b.sine) } else { b.sine.total_cmp(&a.sine) };
     let peak = inner.iter().min_by(deepest)?;
-    let margin = Angle::from_rad((peak.sine - level) / limit.elevation().rad().cos());
-    Some(Touch { at_s: peak.at_s, limit, margin })
+    let margin = Angle::from_rad((peak.sine - level) / at.elevation.rad().cos());
+    Some(Touch { at_s: peak.at_s, limit: at.limit, margin })
 }

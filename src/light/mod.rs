@@ -13,10 +13,14 @@ mod meet;
 mod segment;
 mod along;
 mod sample;
+mod deck;
+mod trust;
 
-pub use along::{Light, along};
+pub use along::{Light, along, beneath};
+pub use deck::{Deck, DeckSegment, deck};
 pub use limit::{Direction, Event, Limit, State};
 pub use meet::{Crossing, TOUCH, Touch};
 pub use sample::{Lookout, Sample};
 pub use segment::{Segment, StateSeconds};
 pub use trace::{Peak, Trace};
+pub use trust::{Doubt, REFRACTION_SCATTER, Trust, doubts, elevation_scatter, trust};
