@@ -38,6 +38,10 @@ const TERMS_BELOW: usize = 10;
 
 /// The horizon of a clear sea, or of cloud tops or terrain at a height.
 ///
+/// # Shapes and units
+/// Heights are geometric, above mean sea level. A flight level taken for one is 18 m too low at FL350 in standard air
+/// (pressure altitudes are geopotential), which is 0.003° of the limit.
+///
 /// # Accuracy
 /// Within 0.0001° of the ray trace it is made from, and that within 0.0002° of an independent one from 0 to 60,000 ft
 /// (`tests/tables/horizon-trace`). The air is another matter: 15 K more or less move the limit at FL350 by 0.08°, the
