@@ -29,7 +29,7 @@
 use super::GeometricElevation;
 use super::air::{Ray, TROPOPAUSE_M};
 use crate::curve::{coefficients, lobatto};
-use crate::units::{Angle, Metres};
+use crate::units::{Angle, Lane, Metres};
 
 /// Coefficients of the series in the root of the height above the horizon.
 const TERMS_ABOVE: usize = 16;
@@ -37,6 +37,10 @@ const TERMS_ABOVE: usize = 16;
 const TERMS_BELOW: usize = 10;
 
 /// The horizon of a clear sea, or of cloud tops or terrain at a height.
+///
+/// # Shapes and units
+/// Heights are geometric, above mean sea level. A flight level taken for one is 18 m too low at FL350 in standard air
+/// (pressure altitudes are geopotential), which is 0.003° of the limit.
 ///
 /// # Accuracy
 /// Within 0.0001° of the ray trace it is made from, and that within 0.0002° of an independent one from 0 to 60,000 ft
@@ -116,10 +120,18 @@ impl Horizon {
     pub fn depression(&self, height: Metres) -> Angle {
         let height_m = answered_for(height);
         Angle::from_rad(if height_m > self.height_m {
-            sum(&self.above, scaled((height_m - self.height_m).sqrt(), Self::roots_above(self.height_m)))
+            self.depression_by_root_rad((height_m - self.height_m).sqrt())
         } else {
             sum(&self.below, scaled((TROPOPAUSE_M - height_m).sqrt(), Self::roots_below(self.height_m)))
         })
+    }
+
+    /// The same in radians for an observer so many metres above the horizon that this is their root, or for four observers:
+    /// a polynomial, for use where formulas are evaluated in lanes; good up to the ceiling of [`Self::HEIGHTS`].
+    #[inline]
+    pub fn depression_by_root_rad<L: Lane>(&self, root: L) -> L {
+        let (_, high) = Self::roots_above(self.height_m);
+        sum(&self.above, root * L::splat(2.0 / high) - L::splat(1.0))
     }
 
     /// The geometric elevation of the Sun's (or Moon's) centre when its upper limb shows on the horizon.
@@ -178,12 +190,14 @@ fn series<const N: usize>(low: f64, high: f64, f: impl Fn(f64) -> f64) -> [f64; 
 }
 
 /// Clenshaw's sum.
-fn sum(terms: &[f64], x: f64) -> f64 {
-    let (mut b1, mut b2) = (0.0, 0.0);
-    for c in terms[1..].iter().rev() {
-        (b1, b2) = (2.0 * x * b1 + (c - b2), b1);
+#[inline]
+fn sum<L: Lane>(terms: &[f64], x: L) -> L {
+    let (mut b1, mut b2) = (L::splat(0.0), L::splat(0.0));
+    let twice = L::splat(2.0) * x;
+    for &c in terms[1..].iter().rev() {
+        (b1, b2) = (twice * b1 + (L::splat(c) - b2), b1);
     }
-    x * b1 + (terms[0] - b2)
+    x * b1 + (L::splat(terms[0]) - b2)
 }
 
 #[cfg(test)]
@@ -191,7 +205,7 @@ mod tests {
     use super::{Horizon, level_bending_rad, sum};
     use crate::curve::{coefficients, lobatto};
     use crate::sky::air::Ray;
-    use crate::units::{Angle, Metres};
+    use crate::units::{Angle, Four, Metres};
 
     fn horizons() -> impl Iterator<Item = Horizon> {
         let heights = [0.0, 1.0, 1_524.0, 5_000.0, 9_144.0, 10_900.0, 11_000.0];
@@ -246,6 +260,16 @@ mod tests {
             let at_m = horizon.height().0;
             let (below, above) = (limit_deg(&horizon, at_m - 1e-9), limit_deg(&horizon, at_m + 1e-9));
             assert!((below - above).abs() < 2e-6, "{at_m}: {below} {above}");
+        }
+    }
+
+    #[test]
+    fn four_observers_at_once_see_what_one_sees() {
+        let sea = Horizon::clear_sea();
+        let roots = [1.0, 30.0, 100.0, 141.0];
+        let four = sea.depression_by_root_rad(Four::from(roots)).to_array();
+        for (root, found) in roots.into_iter().zip(four) {
+            assert!((found - sea.depression(Metres(root * root)).rad()).abs() < 1e-15);
         }
     }
 

@@ -23,7 +23,8 @@ const SPIN_PER_AU: f64 = 7.292_115e-5 * 499.004_784;
 ///
 /// # Shapes and units
 /// `normal` is the outward unit normal, Earth-fixed. The observer stands on the ellipsoid and turns with the Earth: the
-/// parallax (up to 8.9″ for the Sun, 61′ for the Moon) is exact and not a series, the diurnal aberration (up to 0.32″) is of first order.
+/// parallax (up to 8.9″ for the Sun, 61′ for the Moon) is exact and not a series, the diurnal aberration (up to 0.32″) is
+/// of first order. Ten kilometres up the Moon stands up to 6″ lower, which is left out.
 ///
 /// # Source
 /// The place under a normal is N `(n_x, n_y, (1 − e²) n_z)` with `N = a / √(1 − e² n_z²)` (any text on geodesy, e.g.

@@ -1,7 +1,7 @@
 //! The horizon against a ray trace by other numerics, and against the formulae of the trade.
 
 use crate::tables::{Row, number, rows};
-use gloamline::sky::Horizon;
+use gloamline::sky::{GeometricElevation, Horizon, apparent_aloft};
 use gloamline::units::{Angle, Metres};
 
 /// The table's semidiameter (its certificate).
@@ -73,4 +73,16 @@ fn the_dip_is_the_almanacs_near_the_sea() {
 fn the_standard_air_bends_the_level_ray_a_minute_less_than_the_convention() {
     let arcmin = Horizon::clear_sea().refraction(Metres(0.0)).deg() * 60.0;
     assert!((34.0 - arcmin - 1.05).abs() < 0.02, "{arcmin}");
+}
+
+#[test]
+fn what_is_seen_from_aloft_stands_where_an_independent_trace_puts_it() {
+    let all = rows("horizon-trace/aloft.csv");
+    assert!(all.len() > 100);
+    for row in all {
+        let height = Metres::from_feet(number(&row, "height_ft"));
+        let geometric = GeometricElevation(Angle::from_deg(number(&row, "geometric_deg")));
+        let off = apparent_aloft(geometric, height).0.deg() - number(&row, "apparent_deg");
+        assert!(off.abs() < TWO_TRACES_DEG, "{off}° off in {row:?}");
+    }
 }

@@ -1,8 +1,9 @@
 //! The Moon's place and phase against JPL DE421 by way of skyfield, and against a handbook.
 
 use crate::tables::{instant, number, rows};
+use gloamline::curve::{Bandwidth, Curve};
 use gloamline::sky::{Sky, azimuth, elevation, sine_of_elevation};
-use gloamline::units::{Angle, Place};
+use gloamline::units::{Angle, Four, Instant, Place};
 
 /// The series against DE421: what [`gloamline::sky::MoonPlace`] states.
 const TOLERANCE_ARCSEC: f64 = 12.0;
@@ -92,4 +93,31 @@ fn the_moon_is_larger_overhead_than_on_the_horizon() {
         seen += 1;
     }
     assert!(seen > 300);
+}
+
+#[test]
+fn the_moons_elevation_along_a_fast_path_is_as_smooth_as_the_suns() {
+    const TWELVE_HOURS_S: f64 = 43_200.0;
+    // along a parallel and along a meridian, at 300 m/s
+    let along = |turned: f64| [[turned.cos(), turned.sin(), 0.0], [turned.cos(), 0.0, turned.sin()]];
+    let rate = 300.0 / 6_356_752.0;
+    // the sidereal turn serves as a bound: the Moon's own motion is eastward
+    let band = Bandwidth { body_rad_s: 7.292_115e-5, path_rad_s: rate };
+    let sky = Sky::default();
+    let mut worst = 0.0_f64;
+    for i in 0..120 {
+        let begin = Instant::from_seconds(8.5e8 + f64::from(i) * 83_000.0);
+        let window = sky.moon_window(begin, begin.after_s(TWELVE_HOURS_S));
+        for (way, sign) in [(0, 1.0), (0, -1.0), (1, 1.0)] {
+            let sine = |t: f64| sine_of_elevation(along(sign * rate * t)[way], &window.at(t));
+            let curve =
+                Curve::through(0.0, TWELVE_HOURS_S, band, |t| Four::from(t.to_array().map(sine))).unwrap();
+            for k in 0..=60 {
+                let t = TWELVE_HOURS_S / 60.0 * f64::from(k);
+                worst = worst.max((curve.value(t) - sine(t)).abs());
+            }
+        }
+    }
+    // what the Sun's curves are held to
+    assert!(worst < 2e-9, "{worst:e}");
 }

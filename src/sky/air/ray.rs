@@ -15,7 +15,7 @@ const REFRACTIVITY_AT_SEA_LEVEL: f64 =
 /// Where the bending air ends: at 80 km (geopotential) less than 0.01″ is left, which is added in closed form.
 pub(crate) const TOP_M: f64 = super::isa::geometric_m(80_000.0);
 /// Panels of eight nodes for each layer of the atmosphere; the tests show twice as many to change nothing.
-const PANELS: usize = 2;
+const PANELS: usize = 1;
 
 /// Nodes and weights of Gauss and Legendre's rule on [−1, 1], the positive half (Abramowitz and Stegun, table 25.4).
 const GAUSS: [(f64, f64); 4] = [
@@ -80,11 +80,10 @@ impl Ray {
     /// The height in metres at which the ray is level, sought below a height that it passes.
     pub(crate) fn lowest_m(self, below_m: f64) -> f64 {
         let mut height_m = below_m;
-        // secant steps in air whose optical radius is nearly linear in the height
+        // a kink at a layer's edge may cost a step or two, no more: the optical radius is nearly linear in the height
         for _ in 0..30 {
-            let layer = layer_at(height_m);
-            let step = (optical_radius_m(layer, height_m) - self.constant_m) / stretch(layer, height_m);
-            height_m -= step;
+            let step = rise_to(layer_at(height_m), height_m, self.constant_m);
+            height_m += step;
             if step.abs() < 1e-7 {
                 break;
             }
@@ -137,9 +136,10 @@ impl Ray {
         let wanted_m = self.constant_m / slant_rad.cos();
         let mut height_m = near_m;
         for _ in 0..12 {
-            let step = (wanted_m - optical_radius_m(layer, height_m)) / stretch(layer, height_m);
+            let step = rise_to(layer, height_m, wanted_m);
             height_m += step;
-            if step.abs() < 1e-4 {
+            // the next step would be this one's square over some 10 km
+            if step.abs() < 1.0 {
                 break;
             }
         }
@@ -147,10 +147,11 @@ impl Ray {
     }
 }
 
-/// d(n r)/dr.
-fn stretch(layer: &Layer, height_m: f64) -> f64 {
+/// Newton's step in height to where refractive index × radius is a length.
+fn rise_to(layer: &Layer, height_m: f64, optical_m: f64) -> f64 {
     let (less_one, slope) = refractivity(layer, height_m);
-    1.0 + less_one + (RADIUS_M + height_m) * slope
+    let radius_m = RADIUS_M + height_m;
+    (optical_m - radius_m - less_one * radius_m) / (1.0 + less_one + radius_m * slope)
 }
 
 /// How far the ray turns for each radian of its slant.

@@ -1,4 +1,4 @@
-"""Write horizon.csv: the dip, the refraction and the Sun at the horizon, by rays traced in plane coordinates.
+"""Write horizon.csv and aloft.csv: the horizon, and what stands near it, by rays traced in plane coordinates.
 
 It does not know gloamline, whose numerics differ on purpose: here the ray equation is integrated step by step in Cartesian
 coordinates, the pressure comes from integrating the hydrostatic equation, and the index from the 1994 revision of Edlen's formula.
@@ -6,7 +6,7 @@ It knows no weather, no water vapour and no ellipsoid.
 """
 
 from importlib.metadata import version
-from math import atan2, degrees, hypot, pi
+from math import atan2, cos, degrees, hypot, pi, radians, sin
 from pathlib import Path
 
 import numpy as np
@@ -22,6 +22,9 @@ TOP_M = 120000.0
 BREAKS_KM = np.array([-5.0, 0.0, 11.0, 20.0, 32.0, 47.0, 51.0, 71.0, 80.0])
 KELVIN = np.array([320.65, 288.15, 216.65, 216.65, 228.65, 270.65, 270.65, 214.65, 196.65])
 GRAVITY, GAS, GEOPOTENTIAL_RADIUS_M = 9.80665, 287.05287, 6356766.0
+
+ALOFT_FT = [0, 5000, 20000, 35000, 43000, 60000]
+SEEN_DEG = [-4.0, -3.1, -3.0, -2.5, -2.0, -1.5, -1.0, -0.5, -0.1, 0.0, 0.1, 0.5, 1.0, 2.0, 3.0, 5.0, 10.0, 20.0, 45.0, 80.0, 85.0]
 
 SEA_FT = [10, 30, 100, 300] + list(range(0, 60001, 1000))
 RAISED_FT = [5000, 10000, 15000, 20000, 25000, 30000]
@@ -122,6 +125,22 @@ def rows_for(air, radius_m, graze_ft, heights_ft):
         ]
 
 
+def aloft_rows(air):
+    """Lines for bodies seen from a height at an apparent elevation, above the sea's horizon."""
+    grazing = traced(air, MEAN_RADIUS_M, 0.0, [ft * FOOT_M for ft in ALOFT_FT if ft])
+    for ft in ALOFT_FT:
+        height_m = ft * FOOT_M
+        dip_deg = degrees(grazing[height_m][0]) if ft else 0.0
+        for seen_deg in SEEN_DEG:
+            if seen_deg < -dip_deg:
+                continue
+            n = 1.0 + float(air.refractivity(height_m))
+            slant = radians(seen_deg)
+            state = np.array([0.0, MEAN_RADIUS_M + height_m, n * cos(slant), n * sin(slant)])
+            _, _, p, q = leg(air, MEAN_RADIUS_M, state, TOP_M)
+            yield [str(ft), f"{seen_deg:.1f}", f"{degrees(atan2(q, p)):.6f}"]
+
+
 def below_rows(air, horizon_ft):
     """Lines for observers below a raised horizon, to whom it is level."""
     for ft in (0, horizon_ft // 2):
@@ -143,27 +162,50 @@ def table():
     return rows
 
 
-CERTIFICATE = [
-    f"made by: trace.py with numpy {version('numpy')}, scipy {version('scipy')}",
-    "made on: 2026-12-01",
-    "settings: ray equation in plane Cartesian coordinates, DOP853, rtol 1e-12, steps of at most 5 km, stopped at each break of the "
-    "temperature, followed to 120 km; round Earth; temperatures of the ICAO standard atmosphere by geopotential height (constant above "
-    "80 km), all shifted by offset_k, sea-level pressure 1013.25 hPa; dry air, Birch and Downs 1994, at 0.574 micrometre; semidiameter 959.63 arcsec",
-    "columns: height_ft (observer, feet of 0.3048 m, geometric); horizon_ft (height of what the ray grazes; an observer below it sees a level "
-    "horizon); offset_k (kelvin); radius_km; dip_deg (apparent, below level); refraction_deg (whole turn of the grazing ray from space to the "
-    "observer); limit_deg (geometric elevation of the Sun's centre, upper limb on the horizon)",
-    "rounding: 6 decimals of a degree; the index's gradient by central difference of 1 m, which is good to 1e-7 of it",
-    "source: computed here; ICAO Doc 7488/3 (1993); Birch and Downs 1994, Metrologia 31:315",
-    "licence: figures computed here, same licence as gloamline",
-    "mark: C",
-]
-HEADER = "height_ft,horizon_ft,offset_k,radius_km,dip_deg,refraction_deg,limit_deg"
+METHOD = (
+    "ray equation in plane Cartesian coordinates, DOP853, rtol 1e-12, steps of at most 5 km, followed to 120 km; round Earth; temperatures "
+    "of the ICAO standard atmosphere by geopotential height (constant above 80 km), sea-level pressure 1013.25 hPa; dry air, Birch and Downs "
+    "1994, at 0.574 micrometre"
+)
+COLUMNS = {
+    "horizon": (
+        ["height_ft", "horizon_ft", "offset_k", "radius_km", "dip_deg", "refraction_deg", "limit_deg"],
+        f"{METHOD}; stopped at each break of the temperature; all temperatures shifted by offset_k; semidiameter 959.63 arcsec",
+        "height_ft (observer, feet of 0.3048 m, geometric); horizon_ft (height of what the ray grazes; an observer below it sees a level "
+        "horizon); offset_k (kelvin); radius_km; dip_deg (apparent, below level); refraction_deg (whole turn of the grazing ray from space to "
+        "the observer); limit_deg (geometric elevation of the Sun's centre, upper limb on the horizon)",
+    ),
+    "aloft": (
+        ["height_ft", "apparent_deg", "geometric_deg"],
+        f"{METHOD}; radius 6371.0088 km; followed from the observer without a stop",
+        "height_ft (observer, feet of 0.3048 m, geometric); apparent_deg (elevation at which a point of light is seen, exact); geometric_deg "
+        "(its elevation without air)",
+    ),
+}
+
+
+def write(name, rows):
+    """Write one table with its birth certificate."""
+    header, settings, columns = COLUMNS[name]
+    lines = [
+        f"# made by: trace.py with numpy {version('numpy')}, scipy {version('scipy')}",
+        "# made on: 2026-12-01",
+        f"# settings: {settings}",
+        f"# columns: {columns}",
+        "# rounding: 6 decimals of a degree; the index's gradient by central difference of 1 m, which is good to 1e-7 of it",
+        "# source: computed here; ICAO Doc 7488/3 (1993); Birch and Downs 1994, Metrologia 31:315",
+        "# licence: figures computed here, same licence as gloamline",
+        "# mark: C",
+        ",".join(header),
+    ]
+    lines += [",".join(row) for row in rows]
+    Path(__file__).with_name(f"{name}.csv").write_text("\n".join(lines) + "\n", encoding="ascii")
 
 
 def main():
-    """Make the table."""
-    lines = [f"# {line}" for line in CERTIFICATE] + [HEADER] + [",".join(row) for row in table()]
-    Path(__file__).with_name("horizon.csv").write_text("\n".join(lines) + "\n", encoding="ascii")
+    """Make both tables."""
+    write("horizon", table())
+    write("aloft", aloft_rows(Air(0.0)))
 
 
 if __name__ == "__main__":
