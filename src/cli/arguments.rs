@@ -89,6 +89,10 @@ pub(super) struct InlineRequest {
     #[arg(long, value_name = "FEET", requires = "from", allow_hyphen_values = true)]
     pub(super) level_ft: Option<f64>,
 
+    /// Height in feet of the cloud tops or terrain at the flight deck's horizon, if not the sea
+    #[arg(long, value_name = "FEET", requires = "from", allow_hyphen_values = true)]
+    pub(super) horizon_ft: Option<f64>,
+
     /// What the flight is called
     #[arg(long, value_name = "NAME", requires = "from")]
     pub(super) name: Option<String>,

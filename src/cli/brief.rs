@@ -102,6 +102,7 @@ fn flights(request: &BriefRequest) -> Vec<Result<(Flight, String), Refusal>> {
             airborne: inline.airborne.as_deref(),
             landing: inline.landing.as_deref(),
             level_ft: inline.level_ft,
+            horizon_ft: inline.horizon_ft,
         };
         return vec![
             inline_flight(&given).map(|flight| (flight, "the flight".to_string())).map_err(Refusal::from),

@@ -4,9 +4,14 @@ use super::flight::{Flight, PolarLimits, RoutePoint, Stop};
 use super::place::Named;
 use super::problem::{IntakeError, Problem};
 use crate::units::{Dut1, Instant, Metres};
+use std::ops::RangeInclusive;
 
 /// The longest time in the air that is taken for a flight: a day and a half.
 const LONGEST_H: f64 = 36.0;
+/// The levels that aircraft fly at.
+const LEVELS_FT: RangeInclusive<f64> = 0.0..=60_000.0;
+/// The heights that cloud tops or terrain can raise a horizon to: up to the tropopause of the standard atmosphere.
+const HORIZONS_FT: RangeInclusive<f64> = 0.0..=36_000.0;
 /// The most waypoints of one flight.
 pub(super) const MOST_WAYPOINTS: usize = 20_000;
 
@@ -49,6 +54,7 @@ pub(super) struct Draft {
     pub(super) airborne_s: Option<Given<f64>>,
     pub(super) landing: Option<Given<Instant>>,
     pub(super) level_ft: Option<Given<f64>>,
+    pub(super) horizon_ft: Option<Given<f64>>,
     pub(super) waypoints: Vec<Given<RoutePoint>>,
     pub(super) polar_limits: Option<PolarLimits>,
     pub(super) dut1: Option<Dut1>,
@@ -71,9 +77,9 @@ impl Draft {
         let takeoff = self.takeoff.value;
         let landing = self.landing().map_err(|(origin, problem)| fail(&origin, problem))?;
         check_duration(takeoff, landing.value).map_err(|problem| fail(&landing.origin, problem))?;
-        if let Some(level) = self.level_ft.as_ref().filter(|level| !(0.0..=60_000.0).contains(&level.value)) {
-            return Err(fail(&level.origin, Problem::Level(level.value)));
-        }
+        let (level, horizon) = (height(self.level_ft, LEVELS_FT), height(self.horizon_ft, HORIZONS_FT));
+        let level = level.map_err(|(origin, ft)| fail(&origin, Problem::Level(ft)))?;
+        let horizon = horizon.map_err(|(origin, ft)| fail(&origin, Problem::Horizon(ft)))?;
         check_order(&self.waypoints, takeoff, landing.value)
             .map_err(|(origin, problem)| fail(&origin, problem))?;
         let name = self.name.filter(|name| name.chars().any(|c| !c.is_whitespace() && !c.is_control()));
@@ -87,7 +93,8 @@ impl Draft {
             to,
             takeoff,
             landing: landing.value,
-            level: self.level_ft.map(|level| Metres::from_feet(level.value)),
+            level,
+            horizon,
             waypoints: self.waypoints.into_iter().map(|w| w.value).collect(),
             polar_limits: self.polar_limits,
             dut1: self.dut1,
@@ -114,6 +121,14 @@ impl Draft {
                 Err((b.origin, conflict))
             }
         }
+    }
+}
+
+/// A height in feet within its range, or the value that is not, with where it stands.
+fn height(feet: Option<Given<f64>>, range: RangeInclusive<f64>) -> Result<Option<Metres>, (Origin, f64)> {
+    match feet {
+        Some(feet) if !range.contains(&feet.value) => Err((feet.origin, feet.value)),
+        feet => Ok(feet.map(|feet| Metres::from_feet(feet.value))),
     }
 }
 

@@ -18,6 +18,8 @@ pub struct Flight {
     pub landing: Instant,
     /// Cruise height above mean sea level.
     pub level: Option<Metres>,
+    /// Height of the cloud tops or terrain that make the flight deck's horizon, if not the sea.
+    pub horizon: Option<Metres>,
     /// The points between, in order.
     pub waypoints: Vec<RoutePoint>,
     /// Where its operator's authority draws the polar areas, if not where 14 CFR 121.7 does.

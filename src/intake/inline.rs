@@ -23,6 +23,8 @@ pub struct Inline<'a> {
     pub landing: Option<&'a str>,
     /// `--level-ft`
     pub level_ft: Option<f64>,
+    /// `--horizon-ft`
+    pub horizon_ft: Option<f64>,
 }
 
 /// Reads a flight from its options.
@@ -44,6 +46,7 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
         airborne_s: given.airborne.map(|text| read("--airborne", text, duration_s)).transpose()?,
         landing: given.landing.map(|text| read("--landing", text, instant)).transpose()?,
         level_ft: given.level_ft.map(|value| Given { value, origin: Origin::Option("--level-ft") }),
+        horizon_ft: given.horizon_ft.map(|value| Given { value, origin: Origin::Option("--horizon-ft") }),
         waypoints: Vec::new(),
         polar_limits: None,
         dut1: None,

@@ -144,6 +144,9 @@ pub enum Problem {
     /// A level no aircraft flies at.
     #[error("a level of {0} ft is outside 0 ft to 60000 ft")]
     Level(f64),
+    /// A horizon no cloud or mountain makes.
+    #[error("a horizon at {0} ft is outside 0 ft to 36000 ft")]
+    Horizon(f64),
 }
 
 /// A text as given, in quotes, cut short, with everything escaped that could act on a terminal.

@@ -35,6 +35,11 @@ pub(crate) fn limit_elevation(limit: Limit) -> &'static str {
     }
 }
 
+/// Whether the Sun shows, as a key.
+pub(crate) fn visibility_key(sun_visible: bool) -> &'static str {
+    if sun_visible { "sun_visible" } else { "sun_below_horizon" }
+}
+
 /// A limit's key.
 pub(crate) fn limit_key(limit: Limit) -> &'static str {
     match limit {

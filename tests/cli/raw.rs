@@ -68,6 +68,7 @@ proptest! {
         }
         let inline = Inline {
             name: Some(&a), from: &b, to: &c, takeoff: &d, airborne: Some(&a), landing: Some(&b), level_ft: Some(level),
+            horizon_ft: Some(level),
         };
         if let Err(error) = inline_flight(&inline) {
             prop_assert!(!error.to_string().contains(char::is_control), "{error}");

@@ -24,6 +24,7 @@ pub(crate) fn flight(name: &str, takeoff: gloamline::units::Instant, points: &[(
         takeoff,
         landing: takeoff.after_s(last.1),
         level: None,
+        horizon: None,
         waypoints: waypoints.collect(),
         polar_limits: None,
         dut1: None,

@@ -1,9 +1,18 @@
 //! Everything that is said of one flight: the value that every report renders.
 
+mod boundary;
+mod deck;
+
+pub use deck::DeckView;
+
 use crate::intake::{Flight, PolarLimits};
-use crate::light::{Light, Lookout, Sample, along};
+use crate::light::{
+    Doubt, Light, Limit, Lookout, REFRACTION_SCATTER, Sample, Trace, Trust, beneath, doubts, elevation_scatter, trust,
+};
 use crate::path::{CircleCrossing, FlightError, Passed, Path, circles, fly};
 use crate::sky::Sky;
+use crate::units::Angle;
+use deck::Flown;
 
 /// Seconds between the rows of a brief's table.
 const STEP_S: f64 = 60.0;
@@ -19,6 +28,14 @@ pub struct Brief {
     pub light: Light,
     /// The Sun at each crossing, in the crossings' order.
     pub at_crossings: Vec<Sample>,
+    /// How far each crossing can be trusted, in the crossings' order.
+    pub trusts: Vec<Trust>,
+    /// Turns of the Sun so near to the horizon's limit that refraction could add or take away a pair of crossings.
+    pub doubts: Vec<Doubt>,
+    /// What the flight deck sees, if the flight's level is known.
+    pub deck: Option<DeckView>,
+    /// Limits that the Sun meets within two minutes of take-off, and of landing, at the place itself.
+    pub on_boundary: (Vec<Limit>, Vec<Limit>),
     /// The Sun at each touch, in the touches' order.
     pub at_touches: Vec<Sample>,
     /// The Sun at each waypoint, in the flight's order.
@@ -47,9 +64,14 @@ pub struct Brief {
 /// A flight that cannot be flown.
 pub fn brief(flight: Flight, sky: &Sky) -> Result<Brief, FlightError> {
     let path = fly(&flight)?;
-    let light = along(&path, sky);
+    let trace = Trace::beneath(&path, sky);
+    let light = beneath(&trace, path.airborne_s);
     let lookout = Lookout::new(&path, &light, sky);
-    let at_crossings = light.crossings.iter().map(|c| lookout.at(c.at_s)).collect();
+    let ut1_known = flight.dut1.is_some();
+    let at_crossings: Vec<Sample> = light.crossings.iter().map(|c| lookout.at(c.at_s)).collect();
+    let deck = flight.level.map(|height| {
+        deck::view(&trace, (&path, sky), &lookout, Flown { height, horizon: flight.horizon, ut1_known })
+    });
     let at_touches = light.touches.iter().map(|t| lookout.at(t.at_s)).collect();
     let at_waypoints = path.waypoints_s().iter().map(|&at_s| lookout.at(at_s)).collect();
     let (at_highest, at_lowest) = (lookout.at(light.highest.at_s), lookout.at(light.lowest.at_s));
@@ -61,7 +83,11 @@ pub fn brief(flight: Flight, sky: &Sky) -> Result<Brief, FlightError> {
         southernmost: path.southernmost(),
         dut1_s: sky.dut1_s(),
         polar_limits,
+        trusts: trusts(&trace, &light, &at_crossings, ut1_known),
         at_crossings,
+        doubts: doubts(&trace, (Limit::Horizon, Limit::Horizon.elevation()), REFRACTION_SCATTER),
+        on_boundary: boundary::of(&path, sky),
+        deck,
         at_touches,
         at_waypoints,
         at_highest,
@@ -71,6 +97,16 @@ pub fn brief(flight: Flight, sky: &Sky) -> Result<Brief, FlightError> {
         path,
         flight,
     })
+}
+
+/// How far each crossing beneath can be trusted: refraction counts at the horizon only.
+fn trusts(trace: &Trace, light: &Light, at_crossings: &[Sample], ut1_known: bool) -> Vec<Trust> {
+    let pairs = light.crossings.iter().zip(at_crossings);
+    let one = |(crossing, sample): (&crate::light::Crossing, &Sample)| {
+        let scatter = if crossing.limit == Limit::Horizon { REFRACTION_SCATTER } else { Angle::ZERO };
+        trust(trace, crossing, crossing.limit.elevation(), elevation_scatter(sample, scatter, ut1_known))
+    };
+    pairs.map(one).collect()
 }
 
 impl Brief {

@@ -1,0 +1,105 @@
+//! The brief as a record for machines: schema 1. Later versions add to it and rename nothing.
+
+mod aloft;
+mod beneath;
+mod flight;
+
+use crate::Brief;
+use crate::label::clock::machine;
+use crate::label::words::{circle_key, heading_key};
+use crate::units::{Instant, Place};
+use serde::Serialize;
+
+/// The schema's number.
+const SCHEMA: u32 = 1;
+
+#[derive(Debug, Serialize)]
+pub(super) struct Record {
+    schema: u32,
+    flight: flight::FlightRecord,
+    beneath: beneath::BeneathRecord,
+    #[serde(skip_serializing_if = "Option::is_none")]
+    aloft: Option<aloft::AloftRecord>,
+    circles: Vec<CircleRecord>,
+    northernmost: PointRecord,
+    southernmost: PointRecord,
+    ut1_minus_utc_s: f64,
+    cautions: Vec<String>,
+}
+
+#[derive(Debug, Serialize)]
+struct CircleRecord {
+    circle: &'static str,
+    utc: String,
+    direction: &'static str,
+    lat_deg: f64,
+    lon_deg: f64,
+}
+
+#[derive(Debug, Serialize)]
+struct PointRecord {
+    utc: String,
+    lat_deg: f64,
+    lon_deg: f64,
+}
+
+impl Record {
+    pub(super) fn of(brief: &Brief) -> Self {
+        Self {
+            schema: SCHEMA,
+            flight: flight::FlightRecord::of(brief),
+            beneath: beneath::BeneathRecord::of(brief),
+            aloft: brief.deck.as_ref().map(|view| aloft::AloftRecord::of(brief, view)),
+            circles: circles(brief),
+            northernmost: point(brief, brief.northernmost),
+            southernmost: point(brief, brief.southernmost),
+            ut1_minus_utc_s: brief.dut1_s,
+            cautions: super::caution::cautions(brief),
+        }
+    }
+}
+
+/// A number to so many decimals, so that the last bits of a machine's arithmetic do not show; no negative zero.
+pub(super) fn rounded(value: f64, decimals: i32) -> f64 {
+    let scale = 10_f64.powi(decimals);
+    (value * scale).round() / scale + 0.0
+}
+
+/// Degrees to 0.036″, about a metre on the ground.
+fn deg(value: f64) -> f64 {
+    rounded(value, 5)
+}
+
+/// A latitude and longitude for machines.
+fn lat_lon(place: Place) -> (f64, f64) {
+    let lon = deg(place.lon.deg());
+    (deg(place.lat.deg()), if lon >= 180.0 { -180.0 } else { lon })
+}
+
+fn instant(brief: &Brief, at_s: f64) -> Instant {
+    brief.path.takeoff.after_s(at_s)
+}
+
+/// RFC 3339 of a time in seconds from take-off.
+fn when(brief: &Brief, at_s: f64) -> String {
+    machine(instant(brief, at_s))
+}
+
+fn circles(brief: &Brief) -> Vec<CircleRecord> {
+    let record = |crossing: &crate::path::CircleCrossing| {
+        let (lat_deg, lon_deg) = lat_lon(crossing.place);
+        CircleRecord {
+            circle: circle_key(crossing.circle.name),
+            utc: when(brief, crossing.at_s),
+            direction: heading_key(crossing.heading),
+            lat_deg,
+            lon_deg,
+        }
+    };
+    brief.circles.iter().map(record).collect()
+}
+
+fn point(brief: &Brief, passed: crate::path::Passed) -> PointRecord {
+    let (lat_deg, lon_deg) = lat_lon(passed.place);
+    PointRecord { utc: when(brief, passed.at_s), lat_deg, lon_deg }
+}
