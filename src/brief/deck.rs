@@ -1,6 +1,9 @@
 //! The flight deck's share of a brief: what it sees of the Sun, and how far that can be trusted.
 
-use crate::light::{Deck, Doubt, Limit, Lookout, REFRACTION_SCATTER, Sample, Trace, Trust, deck, doubts, elevation_scatter, trust};
+use crate::light::{
+    Deck, Doubt, Limit, Lookout, REFRACTION_SCATTER, Sample, Trace, Trust, deck, doubts, elevation_scatter,
+    trust,
+};
 use crate::path::Path;
 use crate::sky::{Horizon, Sky};
 use crate::units::{Angle, Metres};
@@ -19,8 +22,14 @@ pub struct DeckView {
 }
 
 /// Looks from the deck, at the height flown, over the sea or a horizon of the planner's own.
-pub(super) fn view(trace: &Trace, (path, sky): (&Path, &Sky), lookout: &Lookout<'_>, flown: Flown) -> DeckView {
-    let horizon = flown.horizon.and_then(|height| Horizon::raised(height).ok()).unwrap_or_else(Horizon::clear_sea);
+pub(super) fn view(
+    trace: &Trace,
+    (path, sky): (&Path, &Sky),
+    lookout: &Lookout<'_>,
+    flown: Flown,
+) -> DeckView {
+    let horizon =
+        flown.horizon.and_then(|height| Horizon::raised(height).ok()).unwrap_or_else(Horizon::clear_sea);
     let deck = deck(trace, path, sky, (&horizon, flown.height));
     let scatter = scatter(&deck);
     let at_crossings: Vec<Sample> = deck.crossings.iter().map(|c| lookout.at(c.at_s)).collect();

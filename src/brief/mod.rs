@@ -7,7 +7,8 @@ pub use deck::DeckView;
 
 use crate::intake::{Flight, PolarLimits};
 use crate::light::{
-    Doubt, Light, Limit, Lookout, REFRACTION_SCATTER, Sample, Trace, Trust, beneath, doubts, elevation_scatter, trust,
+    Doubt, Light, Limit, Lookout, REFRACTION_SCATTER, Sample, Trace, Trust, beneath, doubts,
+    elevation_scatter, trust,
 };
 use crate::path::{CircleCrossing, FlightError, Passed, Path, circles, fly};
 use crate::sky::Sky;

@@ -11,8 +11,19 @@ use toml::Spanned;
 use toml::de::{DeTable, DeValue};
 
 /// What a flight file may hold.
-pub(super) const FIELDS: [&str; 11] =
-    ["name", "from", "to", "takeoff", "landing", "airborne", "level_ft", "horizon_ft", "dut1_s", "waypoint", "polar_areas"];
+pub(super) const FIELDS: [&str; 11] = [
+    "name",
+    "from",
+    "to",
+    "takeoff",
+    "landing",
+    "airborne",
+    "level_ft",
+    "horizon_ft",
+    "dut1_s",
+    "waypoint",
+    "polar_areas",
+];
 /// What a waypoint may hold.
 pub(super) const WAYPOINT_FIELDS: [&str; 2] = ["at", "time"];
 /// What a place in degrees must hold.
@@ -73,7 +84,10 @@ impl Reader<'_> {
             takeoff: self.time("takeoff", need("takeoff")?)?,
             airborne_s: table.get("airborne").map(|v| self.duration(v)).transpose()?,
             landing: table.get("landing").map(|v| self.time("landing", v)).transpose()?,
-            horizon_ft: table.get("horizon_ft").map(|v| self.given(v, number("horizon_ft", v))).transpose()?,
+            horizon_ft: table
+                .get("horizon_ft")
+                .map(|v| self.given(v, number("horizon_ft", v)))
+                .transpose()?,
             level_ft: table.get("level_ft").map(|v| self.given(v, number("level_ft", v))).transpose()?,
             waypoints: table.get("waypoint").map_or(Ok(Vec::new()), |v| self.waypoints(v))?,
             polar_limits: table.get("polar_areas").map(polar_limits).transpose()?,

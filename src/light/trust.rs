@@ -50,7 +50,8 @@ pub struct Doubt {
 /// `scatter` is refraction's share: [`REFRACTION_SCATTER`] on the horizon at sea level, nothing at a geometric limit.
 pub fn elevation_scatter(sample: &Sample, scatter: Angle, ut1_known: bool) -> Angle {
     let ut1_s = if ut1_known { 0.0 } else { UT1_S };
-    let turn = EARTH_RAD_S * ut1_s * sample.position.place.lat.angle().rad().cos() * sample.azimuth.rad().sin();
+    let turn =
+        EARTH_RAD_S * ut1_s * sample.position.place.lat.angle().rad().cos() * sample.azimuth.rad().sin();
     Angle::from_rad((scatter.rad().powi(2) + turn.powi(2) + TOUCH.rad().powi(2)).sqrt())
 }
 
@@ -62,10 +63,7 @@ pub fn trust(trace: &Trace, crossing: &Crossing, elevation: Angle, uncertainty: 
     };
     let (up, down) = (shifted(uncertainty), shifted(-uncertainty));
     let late = |reach: &Reach| (reach.at_s - crossing.at_s).abs();
-    Trust {
-        uncertainty_s: late(&up).max(late(&down)).hypot(TIMING_S),
-        doubtful: up.turned || down.turned,
-    }
+    Trust { uncertainty_s: late(&up).max(late(&down)).hypot(TIMING_S), doubtful: up.turned || down.turned }
 }
 
 /// Where a shifted level is met, or how far the Sun comes towards it.

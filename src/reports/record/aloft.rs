@@ -1,6 +1,8 @@
 //! What the flight deck sees, as a record in the shape of the one beneath.
 
-use super::beneath::{CrossingRecord, DoubtRecord, PeakRecord, TouchRecord, crossings, doubts, peak, touches};
+use super::beneath::{
+    CrossingRecord, DoubtRecord, PeakRecord, TouchRecord, crossings, doubts, peak, touches,
+};
 use super::{deg, rounded, when};
 use crate::label::words::visibility_key;
 use crate::{Brief, DeckView};

@@ -1,0 +1,40 @@
+//! A brief that a crew reads in half a minute.
+
+mod format;
+mod head;
+mod beneath;
+mod aloft;
+mod route;
+
+use super::table::wrapped;
+use crate::Brief;
+use crate::units::Instant;
+
+/// How wide a paragraph is set.
+const WIDTH: usize = 100;
+
+/// The brief as plain text.
+pub fn text(brief: &Brief) -> String {
+    let parts = [
+        head::headline(brief),
+        head::ends(brief),
+        beneath::segments(brief),
+        beneath::crossings(brief),
+        beneath::touches(brief),
+        aloft::deck(brief),
+        route::extremes(brief),
+        route::circles(brief),
+        cautions(brief),
+    ];
+    parts.into_iter().filter(|part| !part.is_empty()).collect::<Vec<_>>().join("\n")
+}
+
+fn at(brief: &Brief, at_s: f64) -> Instant {
+    brief.path.takeoff.after_s(at_s)
+}
+
+fn cautions(brief: &Brief) -> String {
+    let lines: String =
+        super::caution::cautions(brief).iter().map(|caution| wrapped("  - ", caution, WIDTH)).collect();
+    format!("Cautions\n{lines}")
+}
