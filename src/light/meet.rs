@@ -69,9 +69,9 @@ pub(super) fn meetings(trace: &Trace, at: Level, crossings: &mut Vec<Crossing>, 
     let last = peaks.len() - 1;
     let strict = |i: usize| if peaks[i].sine >= level { Side::Above } else { Side::Below };
     let margin = TOUCH.rad() * at.elevation.rad().cos();
-    let side = |i: usize| match (peaks[i].sine - level).abs() < margin && i > 0 && i < last {
-        true => Side::Undecided,
-        false => strict(i),
+    let side = |i: usize| {
+        let near = (peaks[i].sine - level).abs() < margin && i > 0 && i < last;
+        if near { Side::Undecided } else { strict(i) }
     };
     let mut from = 0;
     for to in 1..=last {
