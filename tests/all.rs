@@ -10,4 +10,5 @@ mod sky;
 mod path;
 mod light;
 mod charts;
+mod reports;
 mod cli;

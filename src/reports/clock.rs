@@ -49,11 +49,17 @@ pub(super) fn local_minute(instant: Instant, zone: Tz) -> String {
 }
 
 /// `UTC−5`, `UTC+5:30`: a zone's offset at an instant.
-pub(super) fn offset(instant: Instant, zone: Tz) -> String {
+fn offset(instant: Instant, zone: Tz) -> String {
     let seconds = instant.utc().with_timezone(&zone).offset().fix().local_minus_utc();
     let (sign, s) = if seconds < 0 { ('−', -seconds) } else { ('+', seconds) };
     let (hours, minutes) = (s / 3600, s % 3600 / 60);
     if minutes == 0 { format!("UTC{sign}{hours}") } else { format!("UTC{sign}{hours}:{minutes:02}") }
+}
+
+/// A zone's offset over a time, or both of its offsets where its clocks change: `UTC−5, then UTC−4`.
+pub(super) fn offsets(begin: Instant, end: Instant, zone: Tz) -> String {
+    let (first, last) = (offset(begin, zone), offset(end, zone));
+    if first == last { first } else { format!("{first}, then {last}") }
 }
 
 /// `14 h 55 min`, to the nearest minute; seconds are given below an hour.

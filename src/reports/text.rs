@@ -1,11 +1,11 @@
 //! A brief that a crew reads in half a minute.
 
 use super::clean::one_line;
-use super::clock::{date, day_and_second, duration, local_day_and_minute, local_minute, offset, second};
+use super::clock::{date, day_and_second, duration, local_day_and_minute, local_minute, offsets, second};
 use super::table::{columns, wrapped};
 use super::words::{circle_name, event_key, heading_key, limit_key, spoken, state_key};
 use crate::Brief;
-use crate::intake::Stop;
+use crate::intake::{Flight, Stop};
 use crate::light::{Sample, State};
 use crate::units::{Instant, Metres, Place};
 use chrono_tz::Tz;
@@ -57,8 +57,8 @@ fn ends(brief: &Brief) -> String {
     let mut rows = vec![[
         "".into(),
         "UTC".into(),
-        zone_head(&flight.from, flight.takeoff),
-        zone_head(&flight.to, flight.landing),
+        zone_head(&flight.from, flight),
+        zone_head(&flight.to, flight),
         "Sun".into(),
         "light".into(),
     ]];
@@ -78,9 +78,9 @@ fn ends(brief: &Brief) -> String {
     columns(&rows)
 }
 
-fn zone_head(stop: &Stop, at: Instant) -> String {
-    stop.zone
-        .map_or(format!("{} (no zone)", stop.label), |zone| format!("{} ({})", stop.label, offset(at, zone)))
+fn zone_head(stop: &Stop, flight: &Flight) -> String {
+    let clock = stop.zone.map_or("no zone".to_string(), |zone| offsets(flight.takeoff, flight.landing, zone));
+    format!("{} ({clock})", stop.label)
 }
 
 fn local(at: Instant, zone: Option<Tz>) -> String {

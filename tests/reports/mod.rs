@@ -1,0 +1,3 @@
+//! What the reports say, against what they were made from.
+
+mod clocks;
