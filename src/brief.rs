@@ -21,6 +21,8 @@ pub struct Brief {
     pub at_crossings: Vec<Sample>,
     /// The Sun at each touch, in the touches' order.
     pub at_touches: Vec<Sample>,
+    /// The Sun at each waypoint, in the flight's order.
+    pub at_waypoints: Vec<Sample>,
     /// The Sun where it stands highest.
     pub at_highest: Sample,
     /// The Sun where it stands lowest.
@@ -49,6 +51,7 @@ pub fn brief(flight: Flight, sky: &Sky) -> Result<Brief, FlightError> {
     let lookout = Lookout::new(&path, &light, sky);
     let at_crossings = light.crossings.iter().map(|c| lookout.at(c.at_s)).collect();
     let at_touches = light.touches.iter().map(|t| lookout.at(t.at_s)).collect();
+    let at_waypoints = path.waypoints_s().iter().map(|&at_s| lookout.at(at_s)).collect();
     let (at_highest, at_lowest) = (lookout.at(light.highest.at_s), lookout.at(light.lowest.at_s));
     let minutes = lookout.every_s(STEP_S);
     let polar_limits = flight.polar_limits.unwrap_or_default();
@@ -60,6 +63,7 @@ pub fn brief(flight: Flight, sky: &Sky) -> Result<Brief, FlightError> {
         polar_limits,
         at_crossings,
         at_touches,
+        at_waypoints,
         at_highest,
         at_lowest,
         minutes,

@@ -9,7 +9,7 @@ use gloamline::intake::{
 };
 use gloamline::sky::Sky;
 use gloamline::units::{Dut1, Dut1Error, PlaceError};
-use gloamline::{Brief, brief, reports};
+use gloamline::{Brief, brief, charts, reports};
 use std::collections::HashSet;
 use std::path::Path;
 
@@ -160,6 +160,9 @@ fn write_one(folder: &Path, stem: &str, brief: &Brief) -> Result<(), Refusal> {
         &format!("{stem}.csv"),
         reports::csv(std::slice::from_ref(brief)).map_err(|e| said(&e))?.as_bytes(),
     )?;
+    let picture = charts::timeline(brief).map_err(|e| said(&e))?;
+    batch.add(&format!("{stem}.svg"), picture.to_svg().as_bytes())?;
+    batch.add(&format!("{stem}.png"), &picture.to_png(1.0).map_err(|e| said(&e))?)?;
     batch.finish()?;
     Ok(())
 }

@@ -2,6 +2,7 @@
 
 use super::nodes::{MAX_NODES, SIZES, table};
 use super::{Bandwidth, nodes_for};
+use crate::units::Four;
 
 /// One smooth piece of a function of time.
 #[derive(Debug, Clone)]
@@ -18,16 +19,20 @@ pub struct Curve {
 }
 
 impl Curve {
-    /// The curve through `f` on [`begin_s`, `end_s`], or nothing if the interval is too long for one piece.
+    /// The curve through `f` on [`begin_s`, `end_s`], or nothing if the interval is too long for one piece; `f` is asked
+    /// for four times at once.
     ///
     /// # Accuracy
     /// Within 2e−9 of an `f` that the derivation in [`super::error_bound`] holds for.
-    pub fn through(begin_s: f64, end_s: f64, band: Bandwidth, mut f: impl FnMut(f64) -> f64) -> Option<Self> {
+    pub fn through(begin_s: f64, end_s: f64, band: Bandwidth, f: impl Fn(Four) -> Four) -> Option<Self> {
         let size = nodes_for(band, end_s - begin_s)?;
         let (mid_s, half_s) = (f64::midpoint(begin_s, end_s), (end_s - begin_s) / 2.0);
         let mut values = [0.0; MAX_NODES];
-        for (value, x) in values.iter_mut().zip(&table(size).nodes) {
-            *value = f(mid_s + half_s * x);
+        // every size is a multiple of four
+        for (values, nodes) in
+            values.as_chunks_mut::<4>().0.iter_mut().zip(table(size).nodes.as_chunks::<4>().0)
+        {
+            *values = f(Four::splat(mid_s) + Four::splat(half_s) * Four::from(*nodes)).to_array();
         }
         Some(Self::from_values(mid_s, half_s, size, band, values))
     }
@@ -62,6 +67,11 @@ impl Curve {
         self.time_s(-1.0)
     }
 
+    /// Where it ends.
+    pub fn end_s(&self) -> f64 {
+        self.time_s(1.0)
+    }
+
     /// The value at the first node.
     pub fn first(&self) -> f64 {
         self.values[0]
@@ -82,6 +92,17 @@ impl Curve {
         x * b1 + (self.coefficients[0] - b2)
     }
 
+    /// Value and derivative by x.
+    pub(super) fn value_and_slope_x(&self, x: f64) -> [f64; 2] {
+        let (mut b1, mut b2, mut d1, mut d2) = (0.0, 0.0, 0.0, 0.0);
+        let twice = 2.0 * x;
+        for &c in self.coefficients[1..self.len()].iter().rev() {
+            (d1, d2) = (twice * d1 + (2.0 * b1 - d2), d1);
+            (b1, b2) = (twice * b1 + (c - b2), b1);
+        }
+        [x * b1 + (self.coefficients[0] - b2), x * d1 + (b1 - d2)]
+    }
+
     /// Value, first and second derivative by x: Clenshaw's sum differentiated twice.
     pub(super) fn jet_x(&self, x: f64) -> [f64; 3] {
         let (mut b1, mut b2, mut d1, mut d2, mut e1, mut e2) = (0.0, 0.0, 0.0, 0.0, 0.0, 0.0);
@@ -97,6 +118,11 @@ impl Curve {
     /// The time in seconds at x ∈ [−1, 1].
     pub(super) fn time_s(&self, x: f64) -> f64 {
         self.mid_s + self.half_s * x
+    }
+
+    /// A time in seconds as x ∈ [−1, 1].
+    pub(super) fn scaled(&self, t_s: f64) -> f64 {
+        ((t_s - self.mid_s) / self.half_s).clamp(-1.0, 1.0)
     }
 
     /// The node positions.
@@ -125,7 +151,7 @@ mod tests {
     #[test]
     fn a_curve_is_its_function_with_its_slopes() {
         let band = Bandwidth { body_rad_s: 1.1, path_rad_s: 0.0 };
-        let curve = Curve::through(1.0, 5.0, band, |t| (1.1 * t).sin()).unwrap();
+        let curve = Curve::through(1.0, 5.0, band, |t| (t * 1.1).sin()).unwrap();
         for i in 0..=40 {
             let x = f64::from(i) / 20.0 - 1.0;
             let t = curve.time_s(x);

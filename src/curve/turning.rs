@@ -155,8 +155,8 @@ impl Curve {
             }
             let next = x - slope / bend;
             let next = if next >= low && next <= high { next } else { f64::midpoint(low, high) };
-            // the value errs by half the bend times the square of this
-            if (next - x).abs() < 1e-7 {
+            // the next step would be of the order of this one's square, and the value errs by that squared again
+            if (next - x).abs() < 1e-4 {
                 return next;
             }
             x = next;
@@ -168,10 +168,12 @@ impl Curve {
 #[cfg(test)]
 mod tests {
     use crate::curve::{Bandwidth, Curve};
+    use crate::units::Four;
 
     fn turns(f: impl Fn(f64) -> f64, band: f64, end: f64) -> Vec<(f64, f64)> {
         let band = Bandwidth { body_rad_s: band, path_rad_s: 0.0 };
-        let curve = Curve::through(0.0, end, band, f).unwrap();
+        let each = |t: Four| Four::from(t.to_array().map(&f));
+        let curve = Curve::through(0.0, end, band, each).unwrap();
         curve.turns(&curve.turning_points()).collect()
     }
 

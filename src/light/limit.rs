@@ -1,6 +1,7 @@
 //! The four limits, the five states between them, and the names of the eight events.
 
 use crate::units::Angle;
+use std::sync::LazyLock;
 
 /// Refraction at the horizon by the almanacs' convention (Nautical Almanac, explanation).
 const HORIZONTAL_REFRACTION: Angle = Angle::from_arcmin(34.0);
@@ -82,6 +83,13 @@ impl Limit {
         }
     }
 
+    /// The sine of that elevation.
+    pub(super) fn sine(self) -> f64 {
+        static SINES: LazyLock<[f64; 4]> =
+            LazyLock::new(|| Limit::ALL.map(|limit| limit.elevation().rad().sin()));
+        SINES[self as usize]
+    }
+
     /// What meeting the limit is called.
     pub fn event(self, direction: Direction) -> Event {
         match (self, direction) {
@@ -119,7 +127,7 @@ impl State {
 
     /// The state that holds where the Sun's centre has this sine of geometric elevation; on a limit the lighter one.
     pub fn of_sine(sine: f64) -> Self {
-        let below = Limit::ALL.iter().filter(|limit| sine < limit.elevation().rad().sin()).count();
+        let below = Limit::ALL.iter().filter(|limit| sine < limit.sine()).count();
         Self::ALL[below]
     }
 }

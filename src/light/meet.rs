@@ -45,7 +45,7 @@ enum Side {
 
 /// Finds a limit's crossings and touches; appends both.
 pub(super) fn meetings(trace: &Trace, limit: Limit, crossings: &mut Vec<Crossing>, touches: &mut Vec<Touch>) {
-    let level = limit.elevation().rad().sin();
+    let level = limit.sine();
     let peaks = trace.peaks();
     let last = peaks.len() - 1;
     let strict = |i: usize| if peaks[i].sine >= level { Side::Above } else { Side::Below };

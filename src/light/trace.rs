@@ -3,7 +3,7 @@
 use crate::curve::{Bandwidth, Curve};
 use crate::path::{Leg, Path};
 use crate::sky::{MEAN_SUN_RAD_S, Sky, SunWindow, sine_of_elevation};
-use crate::units::wgs84;
+use crate::units::{Four, wgs84};
 
 /// The Sun's true rate about the axis exceeds the mean one by less than this factor: the equation of time changes by
 /// less than 30 s a day and the declination by less than 0.4° a day, which is 0.0012 of a turn together.
@@ -48,7 +48,7 @@ impl Trace {
     /// The crossing of a level between one peak and the next, which lie on both sides of it; seconds from take-off.
     pub(super) fn meets(&self, level: f64, after: usize) -> f64 {
         let (from, to) = (self.peaks[after], self.peaks[after + 1]);
-        self.curves[from.curve].meets(level, from.at_s, to.at_s)
+        self.curves[from.curve].meets(level, from.sine < level, from.at_s, to.at_s)
     }
 
     /// The highest point of the whole path.
@@ -66,7 +66,7 @@ impl Trace {
 fn fit(leg: &Leg, window: &SunWindow<'_>, span: (f64, f64), curves: &mut Vec<Curve>) {
     let band =
         Bandwidth { body_rad_s: TRUE_SUN * MEAN_SUN_RAD_S, path_rad_s: leg.speed_m_s() / wgs84::R_MIN_M };
-    let sine = |t: f64| sine_of_elevation(leg.normal(t), &window.at(t));
+    let sine = |t: Four| sine_of_elevation(leg.normal(t), &window.at(t));
     if let Some(curve) = Curve::through(span.0, span.1, band, sine) {
         curves.push(curve);
     } else {

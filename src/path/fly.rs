@@ -51,6 +51,7 @@ pub struct Path {
     /// Height above mean sea level, where the flight file gives a level.
     pub height: Option<Metres>,
     legs: Vec<Leg>,
+    waypoints_s: Vec<f64>,
 }
 
 /// Where the aircraft is.
@@ -82,17 +83,20 @@ pub fn fly(flight: &Flight) -> Result<Path, FlightError> {
     let airborne_s = flight.landing.since_s(flight.takeoff);
     let fixes = fixes(flight, airborne_s);
     let mut legs = Vec::with_capacity(fixes.len() - 1);
+    let mut passed_s = Vec::with_capacity(fixes.len() - 1);
     let mut begin = 0;
     for end in 1..fixes.len() {
         if fixes[end].at_s.is_some() {
-            stretch(&fixes[begin..=end], &mut legs)?;
+            stretch(&fixes[begin..=end], &mut legs, &mut passed_s)?;
             begin = end;
         }
     }
+    // the last fix is the landing
+    passed_s.pop();
     if legs.iter().all(|leg| leg.length_m() == 0.0) {
         return Err(FlightError::NoLength { from: flight.from.label.clone(), to: flight.to.label.clone() });
     }
-    Ok(Path { takeoff: flight.takeoff, airborne_s, height: flight.level, legs })
+    Ok(Path { takeoff: flight.takeoff, airborne_s, height: flight.level, legs, waypoints_s: passed_s })
 }
 
 fn fixes(flight: &Flight, airborne_s: f64) -> Vec<Fix<'_>> {
@@ -106,8 +110,8 @@ fn fixes(flight: &Flight, airborne_s: f64) -> Vec<Fix<'_>> {
     std::iter::once(begin).chain(between).chain(std::iter::once(end)).collect()
 }
 
-/// The legs between two timed points, all at one speed.
-fn stretch(fixes: &[Fix<'_>], legs: &mut Vec<Leg>) -> Result<(), FlightError> {
+/// The legs between two timed points, all at one speed, and when each point behind the first is passed.
+fn stretch(fixes: &[Fix<'_>], legs: &mut Vec<Leg>, passed_s: &mut Vec<f64>) -> Result<(), FlightError> {
     let (first, last) = (&fixes[0], &fixes[fixes.len() - 1]);
     let (begin_s, end_s) = (first.at_s.unwrap_or(0.0), last.at_s.unwrap_or(0.0));
     let lines: Vec<Line> = fixes.windows(2).map(|pair| Line::between(pair[0].place, pair[1].place)).collect();
@@ -130,6 +134,7 @@ fn stretch(fixes: &[Fix<'_>], legs: &mut Vec<Leg>) -> Result<(), FlightError> {
         // the stretch ends exactly at its given time, whatever the sums round to
         let to_s =
             if i + 1 == count { end_s } else { begin_s + time_share(flown_m, length_m) * (end_s - begin_s) };
+        passed_s.push(to_s);
         if to_s > from_s {
             legs.push(Leg::new(pair[0].place, pair[1].place, line, (from_s, to_s)));
             from_s = to_s;
@@ -147,6 +152,11 @@ impl Path {
     /// The legs, in order.
     pub fn legs(&self) -> &[Leg] {
         &self.legs
+    }
+
+    /// When each waypoint of the flight is passed, in the flight's order: seconds from take-off.
+    pub fn waypoints_s(&self) -> &[f64] {
+        &self.waypoints_s
     }
 
     /// Distance flown, in metres.
@@ -186,6 +196,6 @@ impl Path {
     /// An observer who stays at a place: what a day at an aerodrome is computed from.
     pub fn standing(place: Place, begin: Instant, seconds: f64) -> Self {
         let leg = Leg::new(place, place, Line::between(place, place), (0.0, seconds));
-        Self { takeoff: begin, airborne_s: seconds, height: None, legs: vec![leg] }
+        Self { takeoff: begin, airborne_s: seconds, height: None, legs: vec![leg], waypoints_s: Vec::new() }
     }
 }

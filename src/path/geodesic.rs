@@ -4,7 +4,7 @@
 //! The inverse problem is left to `geographiclib-rs`. Its own line gives a point in 240 ns by way of angles; the same
 //! series written for normals takes a third of that, which is what a million flights are made of.
 
-use crate::units::{Angle, Place, Vector, wgs84};
+use crate::units::{Angle, Lane, Place, Vector, wgs84};
 use geographiclib_rs::{Geodesic, geodesic_capability as mask};
 
 /// Order of the series in the third flattening.
@@ -108,7 +108,7 @@ impl Line {
 
     /// The outward unit normal after `distance_m` from the start.
     #[inline]
-    pub fn normal(&self, distance_m: f64) -> Vector {
+    pub fn normal<L: Lane>(&self, distance_m: L) -> [L; 3] {
         let (sigma, sin, cos) = self.arc(distance_m);
         self.normal_at_arc(sigma, sin, cos)
     }
@@ -122,9 +122,9 @@ impl Line {
 
     /// σ with its sine and cosine, from the distance: eqs. 20 and 21.
     #[inline]
-    fn arc(&self, distance_m: f64) -> (f64, f64, f64) {
-        let tau = self.tau1 + distance_m * self.arc_per_m;
-        let (sin, cos) = tau.sin_cos();
+    fn arc<L: Lane>(&self, distance_m: L) -> (L, L, L) {
+        let tau = L::splat(self.tau1) + distance_m * L::splat(self.arc_per_m);
+        let (sin, cos) = tau.sine_cosine();
         let step = sines(&self.c1_reverted, sin, cos);
         let (sin, cos) = turned(sin, cos, step);
         (tau + step, sin, cos)
@@ -132,14 +132,14 @@ impl Line {
 
     /// The point's vector on the auxiliary sphere turned to its longitude, then from reduced to geodetic latitude.
     #[inline]
-    fn normal_at_arc(&self, sigma: f64, sin: f64, cos: f64) -> Vector {
+    fn normal_at_arc<L: Lane>(&self, sigma: L, sin: L, cos: L) -> [L; 3] {
         // eq. 23 with eq. 8: the longitude is ω plus this, which is below 0.6° either way of the line's middle
-        let twist = self.a3 * (sigma + sines(&self.c3, sin, cos)) - self.twist_mid;
-        let (sin_t, cos_t) = turned(self.sin_base, self.cos_base, twist);
-        let (x, y) = (cos, self.sin_alpha0 * sin);
+        let twist = L::splat(self.a3) * (sigma + sines(&self.c3, sin, cos)) - L::splat(self.twist_mid);
+        let (sin_t, cos_t) = turned(L::splat(self.sin_base), L::splat(self.cos_base), twist);
+        let (x, y) = (cos, L::splat(self.sin_alpha0) * sin);
         // eq. 7 with tan φ = tan β / (1 − f)
-        let z = self.cos_alpha0 * sin * (1.0 / (1.0 - wgs84::F));
-        let scale = 1.0 / (x * x + y * y + z * z).sqrt();
+        let z = L::splat(self.cos_alpha0 / (1.0 - wgs84::F)) * sin;
+        let scale = L::splat(1.0) / (x * x + y * y + z * z).root();
         [(x * cos_t - y * sin_t) * scale, (x * sin_t + y * cos_t) * scale, z * scale]
     }
 
@@ -200,22 +200,24 @@ fn reduced_sine(latitude: Angle) -> f64 {
 
 /// (sin, cos) of an angle turned further by a small one: Taylor to the sixth order, exact to the last bit below 0.01 rad.
 #[inline]
-fn turned(sin: f64, cos: f64, by: f64) -> (f64, f64) {
-    let b2 = by * by;
-    let s = by * (1.0 - b2 / 6.0 * (1.0 - b2 / 20.0));
-    let c = 1.0 - b2 / 2.0 * (1.0 - b2 / 12.0 * (1.0 - b2 / 30.0));
+fn turned<L: Lane>(sin: L, cos: L, by: L) -> (L, L) {
+    let [one, b2] = [L::splat(1.0), by * by];
+    let part = |divisor: f64| b2 * L::splat(1.0 / divisor);
+    let s = by * (one - part(6.0) * (one - part(20.0)));
+    let c = one - part(2.0) * (one - part(12.0) * (one - part(30.0)));
     (sin * c + cos * s, cos * c - sin * s)
 }
 
 /// Σ cₗ sin 2lσ by Clenshaw's sum.
 #[inline]
-fn sines<const N: usize>(c: &[f64; N], sin: f64, cos: f64) -> f64 {
-    let twice = 2.0 * (cos - sin) * (cos + sin);
-    let (mut b1, mut b2) = (0.0, 0.0);
+fn sines<L: Lane, const N: usize>(c: &[f64; N], sin: L, cos: L) -> L {
+    let two = L::splat(2.0);
+    let twice = two * (cos - sin) * (cos + sin);
+    let (mut b1, mut b2) = (L::splat(0.0), L::splat(0.0));
     for &c in c.iter().rev() {
-        (b1, b2) = (twice * b1 + (c - b2), b1);
+        (b1, b2) = (twice * b1 + (L::splat(c) - b2), b1);
     }
-    2.0 * sin * cos * b1
+    two * sin * cos * b1
 }
 
 /// A₁ of eq. 17.

@@ -1,7 +1,7 @@
 //! One leg: a geodesic flown at a constant ground speed.
 
 use super::geodesic::{Line, LinePoint};
-use crate::units::{Place, Vector};
+use crate::units::{Lane, Place};
 
 /// A geodesic and the seconds, counted from take-off, between which it is flown.
 #[derive(Debug, Clone)]
@@ -41,8 +41,8 @@ impl Leg {
 
     /// The outward unit normal beneath the aircraft.
     #[inline]
-    pub fn normal(&self, seconds: f64) -> Vector {
-        self.line.normal((seconds - self.begin_s) * self.speed_m_s)
+    pub fn normal<L: Lane>(&self, seconds: L) -> [L; 3] {
+        self.line.normal((seconds - L::splat(self.begin_s)) * L::splat(self.speed_m_s))
     }
 
     /// Normal and track.

@@ -5,15 +5,22 @@ use crate::Brief;
 /// The cautions of a brief, one sentence each.
 pub(super) fn cautions(brief: &Brief) -> Vec<String> {
     let mut cautions = general();
-    cautions.push(format!(
-        "UT1 − UTC is taken as {} s; it may be up to 0.9 s either way, which moves a time by as much and by more where \
-         the Sun moves slowly along the path.",
-        brief.dut1_s
-    ));
+    cautions.push(ut1(brief.dut1_s));
     if brief.flight.waypoints.is_empty() {
         cautions.push("Positions are those of the shortest path at a constant ground speed.".to_string());
     }
     cautions
+}
+
+/// How UT1 − UTC was taken, and what it does to the times.
+pub(super) fn ut1(dut1_s: f64) -> String {
+    if dut1_s == 0.0 {
+        "UT1 − UTC is taken as 0 s; it may be up to 0.9 s either way, which moves a time by as much, and by more where \
+         the Sun moves slowly along the path."
+            .to_string()
+    } else {
+        format!("UT1 − UTC is taken as {dut1_s} s, as given.")
+    }
 }
 
 /// The cautions that hold for any time computed here.

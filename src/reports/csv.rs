@@ -1,8 +1,8 @@
 //! A brief's minutes as CSV: one row each, RFC 4180 with a header.
 
-use super::clock::machine;
-use super::words::state_key;
 use crate::Brief;
+use crate::label::clock::machine;
+use crate::label::words::state_key;
 use crate::light::Sample;
 
 const HEADER: [&str; 12] = [

@@ -2,9 +2,6 @@
 //!
 //! Computes no angle and opens no file.
 
-mod words;
-mod clean;
-mod clock;
 mod record;
 mod json;
 mod csv;
@@ -14,7 +11,7 @@ mod caution;
 mod sun;
 mod name;
 
-pub use clean::one_line;
+pub use crate::label::one_line;
 pub use csv::csv;
 pub use json::{json, json_list};
 pub use name::file_stem;

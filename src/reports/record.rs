@@ -1,8 +1,8 @@
 //! The brief as a record for machines: schema 1. Later versions add to it and rename nothing.
 
-use super::clock::machine;
-use super::words::{circle_key, direction_key, event_key, heading_key, limit_key, state_key};
 use crate::Brief;
+use crate::label::clock::machine;
+use crate::label::words::{circle_key, direction_key, event_key, heading_key, limit_key, state_key};
 use crate::light::{Sample, State};
 use crate::units::{Instant, Place};
 use serde::Serialize;

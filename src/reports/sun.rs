@@ -1,10 +1,10 @@
 //! The Sun's almanac quantities and a place's day, as text and JSON.
 
-use super::clean::one_line;
-use super::clock::{day_and_second, local_minute, machine, offsets, second};
 use super::record::rounded;
 use super::table::{columns, wrapped};
-use super::words::{event_key, limit_key, spoken, state_key};
+use crate::label::clock::{day_and_second, local_minute, machine, offsets, second};
+use crate::label::one_line;
+use crate::label::words::{event_key, limit_key, spoken, state_key};
 use crate::light::State;
 use crate::sky::{YearEvent, YearMoment};
 use crate::units::Angle;
@@ -39,7 +39,7 @@ pub fn sun_text(brief: &SunBrief) -> String {
     ]
     .map(|row| row.map(str::to_string));
     let here = brief.here.as_ref().map_or(String::new(), |day| format!("\n{}", day_text(day)));
-    let cautions: String = cautions(brief).iter().map(|caution| wrapped("  -", caution, WIDTH)).collect();
+    let cautions: String = cautions(brief).iter().map(|caution| wrapped("  - ", caution, WIDTH)).collect();
     format!(
         "Sun   {} UTC {}\n{}{here}\nCautions\n{cautions}",
         day_and_second(brief.instant),
@@ -49,10 +49,7 @@ pub fn sun_text(brief: &SunBrief) -> String {
 }
 
 fn cautions(brief: &SunBrief) -> Vec<String> {
-    let ut1 = format!(
-        "UT1 − UTC is taken as {} s; it may be up to 0.9 s either way, 13.5″ of hour angle.",
-        brief.dut1_s
-    );
+    let ut1 = super::caution::ut1(brief.dut1_s);
     if brief.here.is_none() {
         vec![ut1]
     } else {
@@ -76,7 +73,7 @@ fn day_text(day: &PlaceDay) -> String {
     out.push_str(&columns(&now));
     out.push_str(&columns(&event_rows(day)));
     if let Some(said) = polar(day) {
-        out.push_str(&wrapped(" ", said, WIDTH));
+        out.push_str(&wrapped("  ", said, WIDTH));
     }
     out
 }
@@ -278,7 +275,7 @@ pub fn year_text(year: i32, moments: &[(YearMoment, SunBrief)]) -> String {
     format!(
         "The Sun's year {year}, UTC\n{}\n{}",
         columns(&moments.iter().map(row).collect::<Vec<_>>()),
-        wrapped("  -", note, WIDTH)
+        wrapped("  - ", note, WIDTH)
     )
 }
 

@@ -1,11 +1,13 @@
 //! A brief that a crew reads in half a minute.
 
-use super::clean::one_line;
-use super::clock::{date, day_and_second, duration, local_day_and_minute, local_minute, offsets, second};
 use super::table::{columns, wrapped};
-use super::words::{circle_name, event_key, heading_key, limit_key, spoken, state_key};
 use crate::Brief;
 use crate::intake::{Flight, Stop};
+use crate::label::clock::{
+    date, day_and_second, duration, local_day_and_minute, local_minute, offsets, second,
+};
+use crate::label::one_line;
+use crate::label::words::{circle_name, event_key, heading_key, limit_key, spoken, state_key};
 use crate::light::{Sample, State};
 use crate::units::{Instant, Metres, Place};
 use chrono_tz::Tz;
@@ -33,62 +35,77 @@ fn headline(brief: &Brief) -> String {
     let length = Metres(brief.path.distance_m());
     let level = flight.level.map_or(String::new(), |level| format!(", cruise {:.0} ft", level.feet()));
     format!(
-        "{}   {} → {}   {}\n{:.0} km ({:.0} NM) in {}{level}\n",
+        "{}   {} → {}   {}\n{}{:.0} km ({:.0} NM) in {}{level}\n",
         one_line(&flight.name),
-        end_name(&flight.from),
-        end_name(&flight.to),
+        stop_name(&flight.from),
+        stop_name(&flight.to),
         date(flight.takeoff),
+        long_names(flight),
         length.0 / 1000.0,
         length.nautical_miles(),
         duration(brief.path.airborne_s),
     )
 }
 
-fn end_name(stop: &Stop) -> String {
-    match &stop.name {
-        Some(name) => format!("{} ({name})", stop.label),
-        None => stop.label.clone(),
+/// A stop's code, or its position where it was given by coordinates.
+fn stop_name(stop: &Stop) -> String {
+    if stop.name.is_some() { stop.label.clone() } else { place(stop.place) }
+}
+
+/// The aerodromes' names on a line of their own, where they have any.
+fn long_names(flight: &Flight) -> String {
+    let names: Vec<&str> =
+        [&flight.from, &flight.to].iter().filter_map(|stop| stop.name.as_deref()).collect();
+    if names.is_empty() { String::new() } else { format!("{}\n", names.join(" to ")) }
+}
+
+/// The local clocks that times are given on besides UTC: each end's, once.
+struct Clocks(Vec<(String, Tz)>);
+
+impl Clocks {
+    fn of(flight: &Flight) -> Self {
+        let mut clocks: Vec<(String, Tz)> = Vec::new();
+        for stop in [&flight.from, &flight.to] {
+            match (stop.zone, clocks.last_mut()) {
+                (Some(zone), Some((label, other))) if zone == *other => {
+                    *label = format!("{label}, {}", stop.label)
+                }
+                (Some(zone), _) => clocks.push((stop.label.clone(), zone)),
+                (None, _) => {}
+            }
+        }
+        Self(clocks)
+    }
+
+    /// A row of cells with the clocks' own after the first.
+    fn row(&self, first: String, clock: impl Fn(&str, Tz) -> String, rest: &[String]) -> Vec<String> {
+        let own = self.0.iter().map(|(label, zone)| clock(label, *zone));
+        std::iter::once(first).chain(own).chain(rest.iter().cloned()).collect()
     }
 }
 
 /// Take-off and landing on every clock, with the Sun there.
 fn ends(brief: &Brief) -> String {
     let flight = &brief.flight;
-    let mut rows = vec![[
-        "".into(),
-        "UTC".into(),
-        zone_head(&flight.from, flight),
-        zone_head(&flight.to, flight),
-        "Sun".into(),
-        "light".into(),
-    ]];
+    let clocks = Clocks::of(flight);
+    let head = |label: &str, zone| format!("{label} ({})", offsets(flight.takeoff, flight.landing, zone));
+    let mut rows = vec![clocks.row(
+        "          UTC".into(),
+        head,
+        &["Sun's elevation, bearing".into(), "light beneath".into()],
+    )];
     for (what, at, sample, state) in [
         ("Take-off", flight.takeoff, brief.at_takeoff(), brief.light.at_takeoff),
-        ("Landing", flight.landing, brief.at_landing(), brief.light.at_landing),
+        ("Landing ", flight.landing, brief.at_landing(), brief.light.at_landing),
     ] {
-        rows.push([
-            what.to_string(),
-            day_and_second(at),
-            local(at, flight.from.zone),
-            local(at, flight.to.zone),
-            sun(sample),
-            spoken(state_key(state)),
-        ]);
+        let first = format!("{what}  {}", day_and_second(at));
+        rows.push(clocks.row(
+            first,
+            |_, zone| local_day_and_minute(at, zone),
+            &[sun(sample), spoken(state_key(state))],
+        ));
     }
     columns(&rows)
-}
-
-fn zone_head(stop: &Stop, flight: &Flight) -> String {
-    let clock = stop.zone.map_or("no zone".to_string(), |zone| offsets(flight.takeoff, flight.landing, zone));
-    format!("{} ({clock})", stop.label)
-}
-
-fn local(at: Instant, zone: Option<Tz>) -> String {
-    zone.map_or("–".to_string(), |zone| local_day_and_minute(at, zone))
-}
-
-fn local_short(at: Instant, zone: Option<Tz>) -> String {
-    zone.map_or("–".to_string(), |zone| local_minute(at, zone))
 }
 
 fn sun(sample: &Sample) -> String {
@@ -131,58 +148,36 @@ fn at(brief: &Brief, at_s: f64) -> Instant {
 
 /// The states in order, and the sums.
 fn segments(brief: &Brief) -> String {
-    let (from, to) = (&brief.flight.from, &brief.flight.to);
-    let mut rows = vec![[
-        "begins UTC".into(),
-        "ends UTC".into(),
-        format!("begins {}", from.label),
-        format!("begins {}", to.label),
-        "lasts".into(),
-        "light beneath".into(),
-    ]];
+    let clocks = Clocks::of(&brief.flight);
+    let tail = ["until UTC", "lasts", "light beneath"].map(str::to_string);
+    let mut rows = vec![clocks.row("from UTC".into(), |label, _| label.to_string(), &tail)];
     for segment in &brief.light.segments {
         let (begin, end) = (at(brief, segment.begin_s), at(brief, segment.end_s));
-        rows.push([
-            second(begin),
-            second(end),
-            local_short(begin, from.zone),
-            local_short(begin, to.zone),
-            duration(segment.seconds()),
-            spoken(state_key(segment.state)),
-        ]);
+        let tail = [second(end), duration(segment.seconds()), spoken(state_key(segment.state))];
+        rows.push(clocks.row(second(begin), |_, zone| local_minute(begin, zone), &tail));
     }
     let sums = State::ALL.into_iter().filter_map(|state| {
         let seconds = brief.light.seconds.in_state(state);
         (seconds > 0.0).then(|| format!("{} {}", spoken(state_key(state)), duration(seconds)))
     });
-    format!("Light\n{}{}", columns(&rows), wrapped("  in all:", &sums.collect::<Vec<_>>().join(", "), WIDTH))
+    format!("Light\n{}{}", columns(&rows), wrapped("  in all: ", &sums.collect::<Vec<_>>().join(", "), WIDTH))
 }
 
 fn crossings(brief: &Brief) -> String {
     if brief.light.crossings.is_empty() {
         return "Crossings\n  none: the Sun meets no limit on this flight\n".to_string();
     }
-    let mut rows = vec![
-        [
-            "UTC",
-            brief.flight.from.label.as_str(),
-            brief.flight.to.label.as_str(),
-            "event",
-            "place beneath",
-            "Sun's bearing",
-        ]
-        .map(str::to_string),
-    ];
+    let clocks = Clocks::of(&brief.flight);
+    let tail = ["event", "place beneath", "Sun's bearing"].map(str::to_string);
+    let mut rows = vec![clocks.row("UTC".into(), |label, _| label.to_string(), &tail)];
     for (crossing, sample) in brief.light.crossings.iter().zip(&brief.at_crossings) {
         let when = at(brief, crossing.at_s);
-        rows.push([
-            second(when),
-            local_short(when, brief.flight.from.zone),
-            local_short(when, brief.flight.to.zone),
+        let tail = [
             spoken(event_key(crossing.limit.event(crossing.direction))),
             place(sample.position.place),
             format!("{} true, {}", bearing(sample.azimuth.deg()), from_track(sample.relative_bearing.deg())),
-        ]);
+        ];
+        rows.push(clocks.row(second(when), |_, zone| local_minute(when, zone), &tail));
     }
     format!("Crossings\n{}", columns(&rows))
 }
@@ -209,7 +204,7 @@ fn touches(brief: &Brief) -> String {
             place(sample.position.place),
             touch.margin.arcsec().abs(),
         );
-        wrapped(" ", &sentence, WIDTH)
+        wrapped("  ", &sentence, WIDTH)
     };
     let lines: String = pairs.map(line).collect();
     if lines.is_empty() { lines } else { format!("Touches\n{lines}") }
@@ -248,6 +243,6 @@ fn circles(brief: &Brief) -> String {
 
 fn cautions(brief: &Brief) -> String {
     let lines: String =
-        super::caution::cautions(brief).iter().map(|caution| wrapped("  -", caution, WIDTH)).collect();
+        super::caution::cautions(brief).iter().map(|caution| wrapped("  - ", caution, WIDTH)).collect();
     format!("Cautions\n{lines}")
 }

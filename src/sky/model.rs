@@ -1,15 +1,19 @@
-//! The Sun's apparent place from the IAU routines: slow, exact, and the source of every table.
+//! The Sun's and the Moon's apparent place from the IAU routines: slow, exact, and the source of every table.
 //!
 //! Left out: polar motion (0.3″ at most) and the Sun's own light deflection, which does not move its centre.
 
-use sofars::{astro::ab, eph::epv00, pnp};
+use sofars::{
+    astro::ab,
+    eph::{epv00, moon98},
+    pnp,
+};
 
 /// J2000.0 as a Julian date.
 const J2000: f64 = 2_451_545.0;
 /// Light travels this many astronomical units in a day: 86,400 s × c / au (IAU 2012 resolution B2; BIPM SI brochure).
 const LIGHT_AU_PER_DAY: f64 = 86_400.0 * 299_792_458.0 / 149_597_870_700.0;
 
-/// The Sun's apparent geocentric direction and distance.
+/// A body's apparent geocentric direction and distance.
 #[derive(Debug, Clone, Copy)]
 pub(super) struct Apparent {
     /// Unit vector in the celestial intermediate system: z the pole of date, x the intermediate origin.
@@ -31,6 +35,23 @@ pub(super) fn apparent(tt_days: f64) -> Apparent {
     let slowness = (1.0 - dot(velocity, velocity)).sqrt();
     let proper = ab(&natural, &velocity, distance_au, slowness);
     let direction = rotate(&pnp::c2i06a(J2000, tt_days), proper);
+    Apparent { direction, distance_au }
+}
+
+/// The Moon's apparent place at an instant of TT, given in days since J2000.0.
+///
+/// Light time (1.3 s, 0.7″) is taken against the Earth as it moves: thereby the aberration by the Earth's velocity is in,
+/// to 0.001″.
+///
+/// # Source
+/// IAU SOFA routines moon98 (Meeus, *Astronomical Algorithms*, 2nd ed., chapter 47, with Simon's mean elements) and c2i06a
+/// as ported by the `sofars` crate.
+pub(super) fn apparent_moon(tt_days: f64) -> Apparent {
+    let [place, velocity] = moon98(J2000, tt_days);
+    let delay = norm(place) / LIGHT_AU_PER_DAY;
+    let as_left: [f64; 3] = std::array::from_fn(|i| place[i] - delay * velocity[i]);
+    let distance_au = norm(as_left);
+    let direction = rotate(&pnp::c2i06a(J2000, tt_days), as_left.map(|c| c / distance_au));
     Apparent { direction, distance_au }
 }
 

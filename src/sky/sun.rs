@@ -1,19 +1,32 @@
 //! The Sun's apparent geocentric place in the Earth-fixed frame, and what follows from it alone.
 
-use crate::units::{Angle, Place, Vector};
+use super::observer::Body;
+use crate::units::{Angle, Lane, Place};
 
 /// One astronomical unit in metres (IAU 2012 resolution B2).
 pub(super) const AU_M: f64 = 149_597_870_700.0;
 /// The Sun's semidiameter at one astronomical unit, 15′59.63″ (Auwers 1891, the almanacs' value).
 const SEMIDIAMETER_AT_AU: Angle = Angle::from_arcsec(959.63);
 
-/// The Sun's apparent geocentric place at an instant.
+/// The Sun's apparent geocentric place at an instant, or at four.
 #[derive(Debug, Clone, Copy, PartialEq)]
-pub struct SunPlace {
+pub struct SunPlace<L = f64> {
     /// Unit vector from the Earth's centre, Earth-fixed.
-    pub direction: Vector,
+    pub direction: [L; 3],
     /// Distance in astronomical units.
-    pub distance_au: f64,
+    pub distance_au: L,
+}
+
+impl<L: Lane> Body<L> for SunPlace<L> {
+    #[inline]
+    fn direction(&self) -> [L; 3] {
+        self.direction
+    }
+
+    #[inline]
+    fn distance_au(&self) -> L {
+        self.distance_au
+    }
 }
 
 impl SunPlace {

@@ -7,12 +7,14 @@ mod ellipsoid;
 mod place;
 mod metres;
 mod instant;
+mod lane;
 mod vector;
 mod ut1;
 
 pub use angle::Angle;
 pub use ellipsoid::wgs84;
 pub use instant::{Instant, YEARS};
+pub use lane::{Four, Lane};
 pub use metres::Metres;
 pub use place::{Latitude, Longitude, Place, PlaceError};
 pub use ut1::{DUT1_BOUND_S, Dut1, Dut1Error};

@@ -1,3 +1,4 @@
 //! Pictures, checked from the outside.
 
 mod canvas;
+mod timeline;

@@ -84,7 +84,7 @@ fn assert_csv_is_inert(text: &str, name: &str) {
 fn a_name_without_a_visible_letter_is_taken_for_none() {
     let folder = folder(&[("flight.toml", &named("\u{1b}\u{7} \t\u{9b}"))]);
     let text = run_in(folder.path(), &["brief", "flight.toml"]).done();
-    assert!(text.starts_with("CYYZ-VHHH 2026-12-18 0510Z   CYYZ ("), "{text}");
+    assert!(text.starts_with("CYYZ-VHHH 2026-12-18 0510Z   CYYZ → "), "{text}");
 }
 
 #[test]

@@ -33,7 +33,10 @@ fn one_flight_that_cannot_be_written_does_not_keep_the_others_back() {
     let ran = run_in(folder.path(), &["brief", "a.toml", "b.toml", "--out", "out"]);
     assert_eq!(ran.code, Some(1), "{}", ran.err);
     let found = names(&folder.path().join("out"));
-    assert_eq!(found, ["other.csv", "varde-71.csv", "varde-71.json", "varde-71.txt"]);
+    assert_eq!(
+        found,
+        ["other.csv", "varde-71.csv", "varde-71.json", "varde-71.png", "varde-71.svg", "varde-71.txt"]
+    );
 }
 
 #[test]
@@ -46,7 +49,7 @@ fn files_of_an_earlier_run_are_replaced() {
     std::fs::write(&text, "old").unwrap();
     brief();
     assert_eq!(std::fs::read(&text).unwrap(), first);
-    assert_eq!(names(&folder.path().join("out")).len(), 3);
+    assert_eq!(names(&folder.path().join("out")).len(), 5);
 }
 
 #[cfg(target_os = "linux")]

@@ -2,3 +2,4 @@
 
 mod geodesics;
 mod circles;
+mod waypoints;

@@ -1,3 +1,6 @@
-//! What the reports say, against what they were made from.
+//! The reports against what they were made from, the committed ones, and the README's commands.
 
 mod clocks;
+mod fresh;
+mod readme;
+mod json;

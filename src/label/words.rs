@@ -4,7 +4,7 @@ use crate::light::{Direction, Event, Limit, State};
 use crate::path::{CircleName, Heading};
 
 /// A state's key in JSON and CSV.
-pub(super) fn state_key(state: State) -> &'static str {
+pub(crate) fn state_key(state: State) -> &'static str {
     match state {
         State::Daylight => "daylight",
         State::CivilTwilight => "civil_twilight",
@@ -14,8 +14,29 @@ pub(super) fn state_key(state: State) -> &'static str {
     }
 }
 
+/// A state's name where room is scarce.
+pub(crate) fn state_short(state: State) -> &'static str {
+    match state {
+        State::Daylight => "day",
+        State::CivilTwilight => "civil",
+        State::NauticalTwilight => "naut.",
+        State::AstronomicalTwilight => "astr.",
+        State::Darkness => "dark",
+    }
+}
+
+/// The elevation of a limit as it is usually written.
+pub(crate) fn limit_elevation(limit: Limit) -> &'static str {
+    match limit {
+        Limit::Horizon => "−50′",
+        Limit::Civil => "−6°",
+        Limit::Nautical => "−12°",
+        Limit::Astronomical => "−18°",
+    }
+}
+
 /// A limit's key.
-pub(super) fn limit_key(limit: Limit) -> &'static str {
+pub(crate) fn limit_key(limit: Limit) -> &'static str {
     match limit {
         Limit::Horizon => "horizon",
         Limit::Civil => "civil",
@@ -25,7 +46,7 @@ pub(super) fn limit_key(limit: Limit) -> &'static str {
 }
 
 /// A direction's key.
-pub(super) fn direction_key(direction: Direction) -> &'static str {
+pub(crate) fn direction_key(direction: Direction) -> &'static str {
     match direction {
         Direction::Rising => "rising",
         Direction::Setting => "setting",
@@ -33,7 +54,7 @@ pub(super) fn direction_key(direction: Direction) -> &'static str {
 }
 
 /// An event's key.
-pub(super) fn event_key(event: Event) -> &'static str {
+pub(crate) fn event_key(event: Event) -> &'static str {
     match event {
         Event::Sunrise => "sunrise",
         Event::Sunset => "sunset",
@@ -47,7 +68,7 @@ pub(super) fn event_key(event: Event) -> &'static str {
 }
 
 /// A circle's key.
-pub(super) fn circle_key(circle: CircleName) -> &'static str {
+pub(crate) fn circle_key(circle: CircleName) -> &'static str {
     match circle {
         CircleName::ArcticCircle => "arctic_circle",
         CircleName::AntarcticCircle => "antarctic_circle",
@@ -61,7 +82,7 @@ pub(super) fn circle_key(circle: CircleName) -> &'static str {
 }
 
 /// A circle's name for people.
-pub(super) fn circle_name(circle: CircleName) -> &'static str {
+pub(crate) fn circle_name(circle: CircleName) -> &'static str {
     match circle {
         CircleName::ArcticCircle => "Arctic Circle",
         CircleName::AntarcticCircle => "Antarctic Circle",
@@ -75,7 +96,7 @@ pub(super) fn circle_name(circle: CircleName) -> &'static str {
 }
 
 /// A heading's key.
-pub(super) fn heading_key(heading: Heading) -> &'static str {
+pub(crate) fn heading_key(heading: Heading) -> &'static str {
     match heading {
         Heading::Northbound => "northbound",
         Heading::Southbound => "southbound",
@@ -85,6 +106,6 @@ pub(super) fn heading_key(heading: Heading) -> &'static str {
 }
 
 /// A key as people read it: words parted by spaces.
-pub(super) fn spoken(key: &str) -> String {
+pub(crate) fn spoken(key: &str) -> String {
     key.replace('_', " ")
 }

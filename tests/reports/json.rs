@@ -1,0 +1,79 @@
+//! JSON schema 1 has the keys that it promises, for every demo flight.
+
+use serde_json::Value;
+use std::process::Command;
+
+/// The contract, as paths; `[]` stands for each element.
+const PROMISED: &[&str] = &[
+    "schema",
+    "flight.name",
+    "flight.from",
+    "flight.to",
+    "flight.takeoff_utc",
+    "flight.landing_utc",
+    "flight.airborne_s",
+    "flight.distance_m",
+    "beneath.state_at_takeoff",
+    "beneath.state_at_landing",
+    "beneath.crossings.[].utc",
+    "beneath.crossings.[].limit",
+    "beneath.crossings.[].direction",
+    "beneath.crossings.[].event",
+    "beneath.crossings.[].lat_deg",
+    "beneath.crossings.[].lon_deg",
+    "beneath.crossings.[].elevation_deg",
+    "beneath.segments.[].state",
+    "beneath.segments.[].begins_utc",
+    "beneath.segments.[].ends_utc",
+    "beneath.segments.[].seconds",
+    "beneath.seconds.daylight",
+    "beneath.seconds.civil_twilight",
+    "beneath.seconds.nautical_twilight",
+    "beneath.seconds.astronomical_twilight",
+    "beneath.seconds.darkness",
+    "beneath.highest.utc",
+    "beneath.highest.elevation_deg",
+    "beneath.highest.lat_deg",
+    "beneath.highest.lon_deg",
+    "beneath.lowest.utc",
+    "circles.[].circle",
+    "circles.[].utc",
+    "circles.[].direction",
+    "circles.[].lat_deg",
+    "circles.[].lon_deg",
+];
+
+fn holds(value: &Value, path: &[&str]) -> bool {
+    match path {
+        [] => !value.is_null(),
+        ["[]", rest @ ..] => value.as_array().is_some_and(|all| all.iter().all(|one| holds(one, rest))),
+        [key, rest @ ..] => value.get(key).is_some_and(|inner| holds(inner, rest)),
+    }
+}
+
+#[test]
+fn schema_one_keeps_its_promise() {
+    let folder = std::path::Path::new(env!("CARGO_MANIFEST_DIR")).join("demo-flights");
+    let files = std::fs::read_dir(folder)
+        .unwrap()
+        .map(|e| e.unwrap().path())
+        .filter(|p| p.extension().is_some_and(|e| e == "toml"));
+    let run = Command::new(env!("CARGO_BIN_EXE_gloamline"))
+        .args(["brief", "--as", "json"])
+        .args(files)
+        .output()
+        .unwrap();
+    let all: Value = serde_json::from_slice(&run.stdout).unwrap();
+    let flights = all.as_array().unwrap();
+    assert!(flights.len() >= 8);
+    for flight in flights {
+        assert_eq!(flight["schema"], 1);
+        for path in PROMISED {
+            let keys: Vec<&str> = path.split('.').collect();
+            assert!(holds(flight, &keys), "{path} is missing in {}", flight["flight"]["name"]);
+        }
+        let sum: f64 =
+            flight["beneath"]["seconds"].as_object().unwrap().values().map(|v| v.as_f64().unwrap()).sum();
+        assert!((sum - flight["flight"]["airborne_s"].as_f64().unwrap()).abs() < 0.01);
+    }
+}
