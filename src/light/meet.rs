@@ -98,6 +98,11 @@ fn touch(run: &[Peak], at: Level) -> Option<Touch> {
     let deepest =
         |a: &&Peak, b: &&Peak| if from_above { a.sine.total_cmp(&b.sine) } else { b.sine.total_cmp(&a.sine) };
     let peak = inner.iter().min_by(deepest)?;
+    // a Sun that only passes from one curve to the next here does not turn
+    let lies_beyond = |end: &Peak| if from_above { peak.sine < end.sine } else { peak.sine > end.sine };
+    if !(lies_beyond(&run[0]) && lies_beyond(&run[run.len() - 1])) {
+        return None;
+    }
     let margin = Angle::from_rad((peak.sine - level) / at.elevation.rad().cos());
     Some(Touch { at_s: peak.at_s, limit: at.limit, margin })
 }

@@ -2,10 +2,10 @@
 
 use super::{flight, reference_flights};
 use gloamline::intake::Flight;
-use gloamline::light::{Direction, Light, Limit, Trace, along};
+use gloamline::light::{Direction, Light, Limit, State, Trace, along};
 use gloamline::path::{Path, fly};
 use gloamline::sky::Sky;
-use gloamline::units::Angle;
+use gloamline::units::{Angle, Instant, Latitude, Place};
 
 /// The Sun's extreme elevation above its limit, as a curve may err: 2e−9 of the sine and the bisection's last bits.
 const CURVE: Angle = Angle::from_arcsec(0.000_5);
@@ -192,4 +192,22 @@ fn a_flight_that_begins_on_either_side_of_a_crossing_has_it_or_not() {
         }
     }
     assert!(tried > 40, "only {tried} tried");
+}
+
+#[test]
+fn a_sun_that_rises_away_from_a_limit_touches_nothing_however_many_waypoints_there_are() {
+    let sky = Sky::default();
+    let pole = Place::from_deg(90.0, 0.0).unwrap();
+    let spring = Instant::from_utc("2026-03-18T00:00:00Z".parse().unwrap());
+    let days = along(&Path::standing(pole, spring, 48.0 * 3600.0), &sky);
+    let [sunrise] = days.crossings[..] else { panic!("{:?}", days.crossings) };
+    // six seconds on the Sun stands a tenth of an arc second higher, which is within what the model may err by
+    let takeoff = spring.after_s(sunrise.at_s + 6.0);
+    let towards_sun = sky.sun_at(takeoff).subsolar().lon;
+    let end = Place { lat: Latitude::from_deg(89.9).unwrap(), lon: towards_sun };
+    let held = (0..20).map(|second| (pole, f64::from(second)));
+    let points: Vec<(Place, f64)> = held.chain(std::iter::once((end, 90.0))).collect();
+    let light = along(&fly(&flight("away", takeoff, &points)).unwrap(), &sky);
+    assert_eq!((light.at_takeoff, light.at_landing), (State::Daylight, State::Daylight));
+    assert!(light.crossings.is_empty() && light.touches.is_empty(), "{:?}", light.touches);
 }

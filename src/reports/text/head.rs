@@ -3,7 +3,7 @@
 use super::format::{place, sun};
 use crate::Brief;
 use crate::intake::{Flight, Stop};
-use crate::label::clock::{date, day_and_second, duration, local_day_and_minute, offset};
+use crate::label::clock::{date, day_and_second, duration, local_day_and_minute, offsets};
 use crate::label::one_line;
 use crate::label::words::{limit_key, spoken, state_key};
 use crate::reports::table::columns;
@@ -73,7 +73,7 @@ impl Clocks {
 pub(super) fn ends(brief: &Brief) -> String {
     let flight = &brief.flight;
     let clocks = Clocks::of(flight);
-    let head = |label: &str, zone| format!("{label} ({})", offset(flight.takeoff, zone));
+    let head = |label: &str, zone| format!("{label} ({})", offsets(flight.takeoff, flight.landing, zone));
     let mut rows = vec![clocks.row(
         "          UTC".into(),
         head,
