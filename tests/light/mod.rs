@@ -1,6 +1,8 @@
 //! The light along flights.
 
 mod crossings;
+mod deck;
+mod trust;
 mod grazing;
 mod properties;
 
