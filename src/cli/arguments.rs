@@ -89,6 +89,14 @@ pub(super) struct InlineRequest {
     #[arg(long, value_name = "FEET", requires = "from", allow_hyphen_values = true)]
     pub(super) level_ft: Option<f64>,
 
+    /// Rate of climb to the cruise height in feet a minute; without it the height holds from take-off to landing
+    #[arg(long, value_name = "FT/MIN", requires = "from", allow_hyphen_values = true)]
+    pub(super) climb_ft_min: Option<f64>,
+
+    /// Rate of descent in feet a minute
+    #[arg(long, value_name = "FT/MIN", requires = "from", allow_hyphen_values = true)]
+    pub(super) descent_ft_min: Option<f64>,
+
     /// Height in feet of the cloud tops or terrain at the flight deck's horizon, if not the sea
     #[arg(long, value_name = "FEET", requires = "from", allow_hyphen_values = true)]
     pub(super) horizon_ft: Option<f64>,

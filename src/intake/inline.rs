@@ -24,6 +24,10 @@ pub struct Inline<'a> {
     pub landing: Option<&'a str>,
     /// `--level-ft`
     pub level_ft: Option<f64>,
+    /// `--climb-ft-min`
+    pub climb_ft_min: Option<f64>,
+    /// `--descent-ft-min`
+    pub descent_ft_min: Option<f64>,
     /// `--horizon-ft`
     pub horizon_ft: Option<f64>,
 }
@@ -48,6 +52,12 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
         landing: given.landing.map(|text| read("--landing", text, instant)).transpose()?,
         level_ft: given.level_ft.map(|value| Given { value, origin: Origin::Option("--level-ft") }),
         horizon_ft: given.horizon_ft.map(|value| Given { value, origin: Origin::Option("--horizon-ft") }),
+        climb_ft_min: given
+            .climb_ft_min
+            .map(|value| Given { value, origin: Origin::Option("--climb-ft-min") }),
+        descent_ft_min: given
+            .descent_ft_min
+            .map(|value| Given { value, origin: Origin::Option("--descent-ft-min") }),
         waypoints: Vec::new(),
         polar_limits: None,
         dut1: None,
@@ -62,7 +72,8 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
 pub fn place_argument(argument: &'static str, text: &str) -> Result<super::Stop, IntakeError> {
     let Given { value: Named { label, place, aerodrome }, .. } = read(argument, text, place)?;
     let name = aerodrome.map(|a| a.name().to_string());
-    Ok(super::Stop { label, name, place, zone: aerodrome.map(Aerodrome::zone) })
+    let (height, zone) = (aerodrome.map(Aerodrome::height), aerodrome.map(Aerodrome::zone));
+    Ok(super::Stop { label, name, place, height, zone })
 }
 
 /// An instant given on its own.

@@ -144,6 +144,12 @@ pub enum Problem {
     /// A level no aircraft flies at.
     #[error("a level of {0} ft is outside 0 ft to 60000 ft")]
     Level(f64),
+    /// A rate no aircraft climbs at.
+    #[error("a rate of {0} ft/min is outside 50 ft/min to 20000 ft/min")]
+    ClimbRate(f64),
+    /// One rate without the other, or without a level.
+    #[error("a rate of climb or descent stands alone")]
+    HalfAClimb,
     /// A horizon no cloud or mountain makes.
     #[error("a horizon at {0} ft is outside 0 ft to 36000 ft")]
     Horizon(f64),
@@ -178,6 +184,7 @@ impl Problem {
             Self::Empty => "a flight file needs at least from, to, takeoff, and airborne or landing",
             Self::UnknownField(field) => return near_field(field),
             Self::Landing(_) => "give one of airborne = \"14h55m\" and landing = 2026-12-18T20:05:00Z",
+            Self::HalfAClimb => "give level_ft, climb_ft_min and descent_ft_min together",
             Self::LandingConflict { .. } => "leave one of them out",
             _ => return None,
         };

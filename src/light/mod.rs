@@ -17,7 +17,7 @@ mod deck;
 mod trust;
 
 pub use along::{Light, along, beneath};
-pub use deck::{Deck, DeckSegment, deck};
+pub use deck::{Deck, DeckHorizon, DeckSegment, deck};
 pub use limit::{Direction, Event, Limit, State};
 pub use meet::{Crossing, TOUCH, Touch};
 pub use sample::{Lookout, Sample};
