@@ -6,7 +6,7 @@ use crate::light::{
     elevation_scatter, trust,
 };
 use crate::path::Path;
-use crate::sky::{Horizon, Sky};
+use crate::sky::{GeometricElevation, Horizon, Sky};
 use crate::units::{Angle, Metres};
 
 /// What the flight deck sees, with the Sun at each crossing and how far each can be trusted.
@@ -16,6 +16,8 @@ pub struct DeckView {
     pub deck: Deck,
     /// The deck's horizon along the path.
     pub horizon: DeckHorizon,
+    /// Its limit each minute from take-off, at landing, and wherever the climb changes, in order of time.
+    pub limits: Vec<(f64, GeometricElevation)>,
     /// The Sun at each crossing, in the crossings' order.
     pub at_crossings: Vec<Sample>,
     /// How far each crossing can be trusted, in their order.
@@ -45,9 +47,19 @@ pub(super) fn view(
         trusts: trusts.collect(),
         doubts: doubts(&trace, (Limit::Horizon, elevation), scatter),
         at_crossings,
+        limits: limits(&horizon, path),
         horizon,
         deck,
     })
+}
+
+fn limits(horizon: &DeckHorizon, path: &Path) -> Vec<(f64, GeometricElevation)> {
+    let minutes = (0..=(path.airborne_s / super::STEP_S) as u32).map(|i| f64::from(i) * super::STEP_S);
+    let bends = path.heights.iter().flat_map(crate::path::Heights::bends_s);
+    let mut times: Vec<f64> = minutes.chain(bends).chain(std::iter::once(path.airborne_s)).collect();
+    times.sort_by(f64::total_cmp);
+    times.dedup();
+    times.into_iter().map(|at_s| (at_s, horizon.limit_at(at_s))).collect()
 }
 
 /// Refraction's scatter on the ray that grazes the deck's horizon: that at sea level, grown with the bending itself.

@@ -3,7 +3,7 @@
 use super::reference_flights;
 use gloamline::brief;
 use gloamline::intake::ClimbRates;
-use gloamline::light::{Deck, DeckHorizon, Limit, State, Trace};
+use gloamline::light::{Deck, DeckHorizon, Limit, Lookout, State, Trace};
 use gloamline::path::{Heights, Path, fly};
 use gloamline::sky::{Horizon, Sky};
 use gloamline::units::Metres;
@@ -116,7 +116,8 @@ fn during_climb_and_descent_the_limit_is_that_of_the_height_flown() {
             met_in_climb += usize::from(heights.at(crossing.at_s).0 < heights.highest().0 - 1.0);
         }
         // stepping finds no change that the crossings do not explain
-        let visible = |t: f64| brief_elevation(&brief, t) >= view.horizon.limit_at(t).0.deg();
+        let lookout = Lookout::new(&brief.path, &brief.light, &sky);
+        let visible = |t: f64| lookout.at(t).elevation.0 >= view.horizon.limit_at(t).0;
         let steps = (brief.path.airborne_s / 10.0) as usize;
         for i in 1..=steps {
             let (a, b) = (10.0 * (i - 1) as f64, 10.0 * i as f64);
@@ -125,11 +126,4 @@ fn during_climb_and_descent_the_limit_is_that_of_the_height_flown() {
         }
     }
     assert!(met_in_climb > 20, "{met_in_climb}");
-}
-
-/// The Sun's elevation at a time, straight from the sky.
-fn brief_elevation(brief: &gloamline::Brief, at_s: f64) -> f64 {
-    let sky = Sky::default();
-    let sun = sky.window(brief.path.takeoff, brief.path.landing()).at(at_s);
-    gloamline::sky::elevation(brief.path.at(at_s).place, &sun).0.deg()
 }
