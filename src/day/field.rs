@@ -3,7 +3,8 @@
 //!
 //! A date is a column as wide as 1. Between the middles of two columns the field is that of a place of the same latitude
 //! where, at a time between the two dates, the clock and the Sun's hour angle agree as they do here: so its edges are
-//! smooth, and pass each date's middle where that date's events are. Where clocks change, it steps.
+//! smooth, and pass each date's middle where that date's events are. Where clocks change, it steps; a date on its own is
+//! level from side to side.
 
 use super::clock::{CivilDay, Clock};
 use super::days::{DayHere, PlaceDays};
@@ -84,6 +85,8 @@ pub fn field(here: &PlaceDays, sky: &Sky) -> Field {
         let first = index(&run[0]);
         if let Some(change) = change(&run[0].civil, here.clock) {
             field.stepped(first, &run[0], &change);
+        } else if field.days == 1 {
+            field.flat(first, &Limit::ALL.map(|limit| above(&run[0].light.segments, limit, HOUR_S)));
         } else {
             let family = Family { place, begin: run[0].civil.begin, first, sky };
             field.smooth(&family, first + run.len());
@@ -133,12 +136,16 @@ impl Field {
             [early, late]
         });
         let parts: Vec<Segment> = parts.filter(|part| part.end_s > part.begin_s).collect();
-        let above = Limit::ALL.map(|limit| above(&parts, limit, 1.0));
-        let at = |at_days: f64, leads_on| Column { at_days, above: above.clone(), leads_on };
-        self.columns.extend([at(day as f64, true), at(day as f64 + 1.0, false)]);
+        self.flat(day, &Limit::ALL.map(|limit| above(&parts, limit, 1.0)));
         if change.after_h > change.before_h {
             self.gaps.push(Gap { day, hours: Interval { from_h: change.before_h, to_h: change.after_h } });
         }
+    }
+
+    /// A date that is drawn as it is from side to side.
+    fn flat(&mut self, day: usize, above: &[Vec<Interval>; Limit::ALL.len()]) {
+        let at = |at_days: f64, leads_on| Column { at_days, above: above.clone(), leads_on };
+        self.columns.extend([at(day as f64, true), at(day as f64 + 1.0, false)]);
     }
 
     /// Dates whose clocks keep one offset.
