@@ -4,7 +4,7 @@ use super::draft::{Draft, Given, Origin};
 use super::flight::Flight;
 use super::place::{Named, place};
 use super::problem::{IntakeError, Problem};
-use super::time::{duration_s, instant};
+use super::time::{date, duration_s, instant};
 use crate::places::Aerodrome;
 
 /// The texts of a flight's command-line options.
@@ -82,6 +82,14 @@ pub fn place_argument(argument: &'static str, text: &str) -> Result<super::Stop,
 /// A time that cannot be read or lies outside the years served, with the name of the argument.
 pub fn instant_argument(argument: &'static str, text: &str) -> Result<crate::units::Instant, IntakeError> {
     read(argument, text, instant).map(|given| given.value)
+}
+
+/// A civil date given on its own.
+///
+/// # Errors
+/// A date that cannot be read or does not exist, with the name of the argument.
+pub fn date_argument(argument: &'static str, text: &str) -> Result<chrono::NaiveDate, IntakeError> {
+    read(argument, text, date).map(|given| given.value)
 }
 
 fn read<T>(

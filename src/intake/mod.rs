@@ -14,5 +14,5 @@ mod inline;
 pub use draft::Origin;
 pub use file::flight_file;
 pub use flight::{ClimbRates, Flight, PolarLimits, RoutePoint, Stop};
-pub use inline::{Inline, inline_flight, instant_argument, place_argument};
+pub use inline::{Inline, date_argument, inline_flight, instant_argument, place_argument};
 pub use problem::{IntakeError, Problem};

@@ -70,6 +70,9 @@ pub enum Problem {
     /// A time that cannot be read.
     #[error("{} is no date and time", quoted(.0))]
     Instant(String),
+    /// A date that cannot be read, or that no calendar has.
+    #[error("{} is no date", quoted(.0))]
+    Date(String),
     /// A time without an offset.
     #[error("{} says no offset from UTC", quoted(.0))]
     NoOffset(String),
@@ -179,6 +182,7 @@ impl Problem {
             Self::Instant(_) | Self::NoOffset(_) => {
                 "write 2026-12-18T05:10Z, or 2026-12-18T00:10-05:00 with an offset"
             }
+            Self::Date(_) => "write 2026-12-18",
             Self::Duration(_) => "write 14h55m, 14h or 55m",
             Self::NotText(_) => "a flight file is TOML in UTF-8: save it as UTF-8, not as UTF-16",
             Self::Empty => "a flight file needs at least from, to, takeoff, and airborne or landing",

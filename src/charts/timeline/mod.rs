@@ -3,7 +3,7 @@
 //!
 //! Computes no angle: every number is found in the [`Brief`]. Knows nothing of files.
 
-mod style;
+pub(super) mod style;
 mod frame;
 mod layout;
 mod heading;
