@@ -62,12 +62,15 @@ impl Trace {
     }
 }
 
+/// How fast the Sun and the vertical turn on a leg.
+pub(super) fn band(leg: &Leg) -> Bandwidth {
+    Bandwidth { body_rad_s: TRUE_SUN * MEAN_SUN_RAD_S, path_rad_s: leg.speed_m_s() / wgs84::R_MIN_M }
+}
+
 /// Appends the curves of a leg: one, or those of its halves where one polynomial would need too many nodes.
 fn fit(leg: &Leg, window: &SunWindow<'_>, span: (f64, f64), curves: &mut Vec<Curve>) {
-    let band =
-        Bandwidth { body_rad_s: TRUE_SUN * MEAN_SUN_RAD_S, path_rad_s: leg.speed_m_s() / wgs84::R_MIN_M };
     let sine = |t: Four| sine_of_elevation(leg.normal(t), &window.at(t));
-    if let Some(curve) = Curve::through(span.0, span.1, band, sine) {
+    if let Some(curve) = Curve::through(span.0, span.1, band(leg), sine) {
         curves.push(curve);
     } else {
         let middle = f64::midpoint(span.0, span.1);

@@ -11,5 +11,5 @@ mod extent;
 pub use circle::{Circle, CircleCrossing, CircleName, Heading, circles};
 pub use extent::Passed;
 pub use fly::{FlightError, Path, Position, fly};
-pub use geodesic::{Line, LinePoint};
+pub use geodesic::{Frame, Line, LinePoint};
 pub use leg::Leg;
