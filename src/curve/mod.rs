@@ -11,11 +11,11 @@
 
 mod bound;
 mod nodes;
-mod curve;
+mod polynomial;
 mod turning;
 mod root;
 
 pub use bound::{Bandwidth, error_bound, nodes_for};
-pub use curve::Curve;
 pub use nodes::{MAX_NODES, coefficients, lobatto};
+pub use polynomial::Curve;
 pub use turning::TurningPoints;

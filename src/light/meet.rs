@@ -69,9 +69,9 @@ pub(super) fn meetings(trace: &Trace, at: Level, crossings: &mut Vec<Crossing>, 
     let last = peaks.len() - 1;
     let strict = |i: usize| if peaks[i].sine >= level { Side::Above } else { Side::Below };
     let margin = TOUCH.rad() * at.elevation.rad().cos();
-    let side = |i: usize| match (peaks[i].sine - level).abs() < margin && i > 0 && i < last {
-        true => Side::Undecided,
-        false => strict(i),
+    let side = |i: usize| {
+        let near = (peaks[i].sine - level).abs() < margin && i > 0 && i < last;
+        if near { Side::Undecided } else { strict(i) }
     };
     let mut from = 0;
     for to in 1..=last {
@@ -98,6 +98,11 @@ fn touch(run: &[Peak], at: Level) -> Option<Touch> {
     let deepest =
         |a: &&Peak, b: &&Peak| if from_above { a.sine.total_cmp(&b.sine) } else { b.sine.total_cmp(&a.sine) };
     let peak = inner.iter().min_by(deepest)?;
+    // a Sun that only passes from one curve to the next here does not turn
+    let lies_beyond = |end: &Peak| if from_above { peak.sine < end.sine } else { peak.sine > end.sine };
+    if !(lies_beyond(&run[0]) && lies_beyond(&run[run.len() - 1])) {
+        return None;
+    }
     let margin = Angle::from_rad((peak.sine - level) / at.elevation.rad().cos());
     Some(Touch { at_s: peak.at_s, limit: at.limit, margin })
 }

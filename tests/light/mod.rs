@@ -2,6 +2,8 @@
 
 mod ahead;
 mod crossings;
+mod deck;
+mod trust;
 mod grazing;
 mod properties;
 
