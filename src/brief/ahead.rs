@@ -23,15 +23,12 @@ pub(super) fn spans(
     (light, deck): (&Light, Option<&DeckView>),
     limits: LowSunLimits,
 ) -> Vec<AheadSpan> {
-    let visible: Vec<(f64, f64)> = match deck {
-        Some(view) => {
-            let shown = view.deck.segments.iter().filter(|segment| segment.sun_visible);
-            shown.map(|segment| (segment.begin_s, segment.end_s)).collect()
-        }
-        None => {
-            let shown = light.segments.iter().filter(|segment| segment.state == State::Daylight);
-            shown.map(|segment| (segment.begin_s, segment.end_s)).collect()
-        }
+    let visible: Vec<(f64, f64)> = if let Some(view) = deck {
+        let shown = view.deck.segments.iter().filter(|segment| segment.sun_visible);
+        shown.map(|segment| (segment.begin_s, segment.end_s)).collect()
+    } else {
+        let shown = light.segments.iter().filter(|segment| segment.state == State::Daylight);
+        shown.map(|segment| (segment.begin_s, segment.end_s)).collect()
     };
     let height = deck.map_or(Metres(0.0), |view| view.deck.height);
     let sector =

@@ -244,7 +244,9 @@ fn near_field(field: &str) -> Option<String> {
     let given = pairs(&lower);
     let shared = |word: &str| pairs(word).iter().filter(|pair| given.contains(pair)).count();
     let exchanged = known.iter().find(|word| letters(word) == letters(&lower));
-    let alike =
-        || known.iter().max_by_key(|word| shared(word)).filter(|best| shared(best) * 2 >= best.len() - 1);
+    let alike = || {
+        let near = known.iter().filter(|word| shared(word) * 2 >= word.len() - 1);
+        near.max_by_key(|word| shared(word))
+    };
     exchanged.or_else(alike).map(|best| format!("did you mean '{best}'?"))
 }

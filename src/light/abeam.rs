@@ -6,6 +6,9 @@ use crate::curve::{Bandwidth, Curve};
 use crate::path::{Leg, Line, Path};
 use crate::units::{Four, Metres, Place, Vector, dot, wgs84};
 
+/// Cosines nearer to one another than this are the same: the last bits of two legs that meet, 0.3 m at most.
+const SAME: f64 = 4.0 * f64::EPSILON;
+
 /// Where a path is nearest to a place.
 #[derive(Debug, Clone, Copy)]
 pub struct Abeam {
@@ -56,7 +59,7 @@ fn nearest(leg: &Leg, vertical: Vector, span: (f64, f64), best: &mut Nearest) {
     let turns = curve.turning_points();
     let ends = [(span.0, curve.first()), (span.1, curve.last())];
     for (at_s, cosine) in ends.into_iter().chain(curve.turns(&turns)) {
-        if cosine > best.cosine {
+        if cosine > best.cosine + SAME {
             *best = Nearest { at_s, cosine: cosine.min(1.0) };
         }
     }

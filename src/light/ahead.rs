@@ -174,9 +174,9 @@ impl View<'_> {
         let mut width = reached - BEARING_STEP.rad();
         while width > missed {
             if self.within(span, Angle::from_rad(width)).is_empty() {
-                missed = width
+                missed = width;
             } else {
-                reached = width
+                reached = width;
             }
             width = f64::midpoint(missed, reached);
             if reached - missed <= BEARING_STEP.rad() * 1.001 {

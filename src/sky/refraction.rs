@@ -202,7 +202,7 @@ mod tests {
     #[test]
     fn what_is_seen_at_an_elevation_stands_where_it_is_seen_from() {
         for feet in [0.0, 12_000.0, 41_000.0] {
-            for deg in [-0.1, 0.0, 4.0, 15.0, 79.0, 89.0] {
+            for deg in [-0.1_f64, 0.0, 4.0, 15.0, 79.0, 89.0] {
                 let height = Metres::from_feet(feet);
                 let apparent = ApparentElevation(Angle::from_deg(if feet == 0.0 { deg.abs() } else { deg }));
                 let back = apparent_aloft(geometric_aloft(apparent, height), height);

@@ -206,7 +206,7 @@ fn a_place_that_is_passed_overhead_is_abeam_then() {
         (at(50.0, 10.0), 0.0),
         (at(60.0, 30.0), 7200.0),
         (at(60.0, 30.0), 9000.0),
-        (at(55.0, 60.0), 16_000.0),
+        (at(50.0, 40.0), 16_000.0),
     ];
     let path = gloamline::path::fly(&super::flight("x", takeoff, &points)).unwrap();
     let over = abeam(&path, path.at(4321.0).place);

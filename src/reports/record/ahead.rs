@@ -47,6 +47,7 @@ struct StrongRecord {
 }
 
 #[derive(Debug, Serialize)]
+#[allow(clippy::struct_field_names, reason = "keys of the schema carry their unit")]
 struct SunRecord {
     elevation_deg: f64,
     apparent_elevation_deg: f64,

@@ -64,27 +64,25 @@ pub(super) fn runways(brief: &Brief) -> String {
 }
 
 fn stop(what: &str, view: &RunwayView) -> String {
+    if !view.is_low && view.apparent.0.deg() < 0.0 {
+        return format!("  {what}: the Sun is below the horizon\n");
+    }
     let sun =
         format!("Sun seen at {}, {} true", signed(view.apparent.0.deg(), 1), bearing(view.azimuth.deg()));
-    let Some(ends) = &view.ends else {
-        let known =
-            if view.is_low { "; runways unknown, low Sun not ruled out" } else { "; runways unknown" };
-        return wrapped("  ", &format!("{what}: {sun}{known}"), WIDTH);
+    let ends = view.ends.as_deref().unwrap_or_default();
+    let ahead: Vec<[String; 4]> = ends.iter().filter(|end| end.glare != Glare::None).map(end).collect();
+    let verdict = match (view.is_low, &view.ends, ahead.len()) {
+        (false, ..) => "not low: ahead of no runway".to_string(),
+        (true, None, _) => "runways unknown, a low Sun ahead is not ruled out".to_string(),
+        (true, _, 0) => format!("low, ahead of none of the {} runway ends", ends.len()),
+        (true, _, count) => format!("low, ahead of {count} of the {} runway ends", ends.len()),
     };
-    let ahead: Vec<&RunwaySun> = ends.iter().filter(|end| end.glare != Glare::None).collect();
-    let rest = match (view.is_low, ahead.len()) {
-        (false, _) => "not low: none of the runways faces a low Sun".to_string(),
-        (true, 0) => format!("low, ahead of none of the {} runway ends", ends.len()),
-        (true, count) => format!("low, ahead of {count} of the {} runway ends", ends.len()),
-    };
-    let rows: Vec<[String; 4]> = ahead.into_iter().map(end).collect();
-    let table: String = columns(&rows).lines().map(|line| format!("  {line}\n")).collect();
-    format!("{}{table}", wrapped("  ", &format!("{what}: {sun}; {rest}"), WIDTH))
+    format!("{}{}", wrapped("  ", &format!("{what}: {sun}; {verdict}"), WIDTH), columns(&ahead))
 }
 
 fn end(end: &RunwaySun) -> [String; 4] {
     [
-        format!("runway {}", end.designator),
+        format!("  runway {}", end.designator),
         format!("{:05.1}°", end.bearing.deg()),
         if end.glare == Glare::Strong { "strong low Sun ahead" } else { "low Sun ahead" }.to_string(),
         from_track(end.relative_bearing.deg()).replace("track", "runway"),
