@@ -16,5 +16,5 @@ mod sun_brief;
 pub mod charts;
 pub mod reports;
 
-pub use brief::{Brief, DeckView, brief};
+pub use brief::{AlternateView, Brief, DeckView, Glare, Polar, RunwaySun, RunwayView, brief};
 pub use sun_brief::{PlaceDay, SunBrief, sun_brief};

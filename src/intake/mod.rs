@@ -4,6 +4,7 @@
 //! is checked where the geodesics are, in `path`.
 
 mod flight;
+mod ahead;
 mod problem;
 mod place;
 mod time;
@@ -11,6 +12,7 @@ mod draft;
 mod file;
 mod inline;
 
+pub use ahead::{Alternate, LowSunLimits, StationAir};
 pub use draft::Origin;
 pub use file::flight_file;
 pub use flight::{ClimbRates, Flight, PolarLimits, RoutePoint, Stop};

@@ -15,7 +15,12 @@ mod along;
 mod sample;
 mod deck;
 mod trust;
+mod span;
+mod ahead;
+mod abeam;
 
+pub use abeam::{Abeam, abeam};
+pub use ahead::{AheadSpan, Sector, SunAhead, Watch, ahead};
 pub use along::{Light, along, beneath};
 pub use deck::{Deck, DeckHorizon, DeckSegment, deck};
 pub use limit::{Direction, Event, Limit, State};

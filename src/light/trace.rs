@@ -79,6 +79,11 @@ impl Trace {
     }
 }
 
+/// How fast the Sun and the vertical turn on a leg.
+pub(super) fn band(leg: &Leg) -> Bandwidth {
+    Bandwidth { body_rad_s: TRUE_SUN * MEAN_SUN_RAD_S, path_rad_s: leg.speed_m_s() / wgs84::R_MIN_M }
+}
+
 /// Appends the curves of a leg: one, or those of its halves where one polynomial would need too many nodes.
 fn fit(leg: &Leg, window: &SunWindow<'_>, span: (f64, f64), curves: &mut Vec<Curve>) {
     let sine = |t: Four| sine_of_elevation(leg.normal(t), &window.at(t));
@@ -110,10 +115,6 @@ fn fit_against(
         fit_against(leg, window, (span.0, middle), limit, curves);
         fit_against(leg, window, (middle, span.1), limit, curves);
     }
-}
-
-fn band(leg: &Leg) -> Bandwidth {
-    Bandwidth { body_rad_s: TRUE_SUN * MEAN_SUN_RAD_S, path_rad_s: leg.speed_m_s() / wgs84::R_MIN_M }
 }
 
 fn peaks(curves: &[Curve], path: &Path) -> Vec<Peak> {

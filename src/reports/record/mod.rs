@@ -1,6 +1,8 @@
 //! The brief as a record for machines: schema 1. Later versions add to it and rename nothing.
 
+mod ahead;
 mod aloft;
+mod alternates;
 mod beneath;
 mod flight;
 
@@ -20,6 +22,10 @@ pub(super) struct Record {
     beneath: beneath::BeneathRecord,
     #[serde(skip_serializing_if = "Option::is_none")]
     aloft: Option<aloft::AloftRecord>,
+    low_sun: Vec<ahead::LowSunRecord>,
+    low_sun_limits: ahead::LowSunLimitsRecord,
+    runways: [ahead::RunwaysRecord; 2],
+    alternates: Vec<alternates::AlternateRecord>,
     circles: Vec<CircleRecord>,
     northernmost: PointRecord,
     southernmost: PointRecord,
@@ -50,6 +56,10 @@ impl Record {
             flight: flight::FlightRecord::of(brief),
             beneath: beneath::BeneathRecord::of(brief),
             aloft: brief.deck.as_ref().map(|view| aloft::AloftRecord::of(brief, view)),
+            low_sun: ahead::low_sun(brief),
+            low_sun_limits: ahead::LowSunLimitsRecord::of(brief),
+            runways: ahead::runways(brief),
+            alternates: alternates::alternates(brief),
             circles: circles(brief),
             northernmost: point(brief, brief.northernmost),
             southernmost: point(brief, brief.southernmost),

@@ -4,6 +4,8 @@ pub(super) mod format;
 mod head;
 mod beneath;
 mod aloft;
+mod ahead;
+mod alternates;
 mod route;
 
 use super::table::wrapped;
@@ -22,6 +24,9 @@ pub fn text(brief: &Brief) -> String {
         beneath::crossings(brief),
         beneath::touches(brief),
         aloft::deck(brief),
+        ahead::low_sun(brief),
+        ahead::runways(brief),
+        alternates::alternates(brief),
         route::extremes(brief),
         route::circles(brief),
         cautions(brief),
