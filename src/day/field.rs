@@ -124,17 +124,18 @@ fn change(day: &CivilDay, clock: Clock) -> Option<Change> {
 impl Field {
     /// A date whose clock changes: its own hours as they were, the second of those that come twice.
     fn stepped(&mut self, day: usize, here: &DayHere, change: &Change) {
-        let hour = |at_s: f64| {
-            if at_s < change.at_s { at_s / HOUR_S } else { change.after_h + (at_s - change.at_s) / HOUR_S }
-        };
-        let kept_s = change.at_s.min(change.after_h * HOUR_S);
+        let kept_h = change.before_h.min(change.after_h);
+        let late_h = |at_s: f64| change.after_h + (at_s - change.at_s) / HOUR_S;
+        // what holds after the change is carried back over hours that were skipped, so that they make no edges
+        let begin_h = |at_s: f64| if at_s <= change.at_s { kept_h } else { late_h(at_s) };
         let parts = here.light.segments.iter().flat_map(|segment| {
             let (begin_s, end_s) = (segment.begin_s, segment.end_s);
-            let early = Segment { end_s: end_s.min(kept_s) / HOUR_S, begin_s: begin_s / HOUR_S, ..*segment };
-            let late_s = begin_s.max(change.at_s);
-            let late = Segment { begin_s: hour(late_s), end_s: hour(late_s.max(end_s)), ..*segment };
-            [early, late]
+            let early =
+                Segment { begin_s: begin_s / HOUR_S, end_s: (end_s / HOUR_S).min(kept_h), ..*segment };
+            let late = Segment { begin_s: begin_h(begin_s), end_s: late_h(end_s), ..*segment };
+            if end_s > change.at_s { [Some(early), Some(late)] } else { [Some(early), None] }
         });
+        let parts = parts.flatten();
         let parts: Vec<Segment> = parts.filter(|part| part.end_s > part.begin_s).collect();
         self.flat(day, &Limit::ALL.map(|limit| above(&parts, limit, 1.0)));
         if change.after_h > change.before_h {

@@ -94,3 +94,18 @@ fn a_field_is_blank_where_the_clock_skips() {
     assert_eq!(gaps("Pacific/Apia", "2011-12-29", "2011-12-31"), [(1, 0.0, 24.0)]);
     assert!(gaps("Europe/London", "2026-10-24", "2026-10-26").is_empty());
 }
+
+#[test]
+fn a_skipped_hour_of_a_polar_day_makes_no_sunrise() {
+    for (first, last) in [("2026-09-25", "2026-09-29"), ("2026-04-03", "2026-04-07")] {
+        let here = days(stop(-90.0, 0.0, Some("Antarctica/McMurdo")), first, last);
+        let field = field(&here, &SKY);
+        let whole = |column: &gloamline::day::Column| {
+            let above = &column.above[Limit::Civil as usize];
+            above.len() == 1 && above[0].from_h == 0.0 && (above[0].to_h - 24.0).abs() < 1e-9
+        };
+        assert_eq!(field.columns.iter().all(whole), first.contains("-09-"), "{first}");
+        let pieces = field.columns.iter().flat_map(|column| &column.above).map(Vec::len).max();
+        assert_eq!(pieces, Some(1), "{first}");
+    }
+}
