@@ -5,12 +5,22 @@ use crate::Brief;
 /// The cautions of a brief, one sentence each.
 pub(super) fn cautions(brief: &Brief) -> Vec<String> {
     let mut cautions = general();
+    if brief.deck.is_some() {
+        cautions.push(DECK.to_string());
+    }
     cautions.push(ut1(brief.dut1_s));
     if brief.flight.waypoints.is_empty() {
         cautions.push("Positions are those of the shortest path at a constant ground speed.".to_string());
     }
     cautions
 }
+
+/// How the deck's horizon is reckoned, and how it meets the one beneath.
+const DECK: &str = "From the deck the horizon is that of the standard atmosphere over a clear sea, or over the height \
+                    given for it: the ray that grazes it is bent on its way down and again on its way up. At height 0 \
+                    that air bends by 33′ where the almanacs' convention beneath takes 34′, so the two limits meet to \
+                    within 1′ there and are not blended. 15 K warmer or colder air moves the deck's limit by 0.08°, \
+                    and cloud at the horizon hides the Sun sooner. Levels are taken as heights above the sea.";
 
 /// How UT1 − UTC was taken, and what it does to the times.
 pub(super) fn ut1(dut1_s: f64) -> String {
