@@ -15,5 +15,5 @@ mod sun_brief;
 pub mod charts;
 pub mod reports;
 
-pub use brief::{Brief, DeckView, brief};
+pub use brief::{Brief, DeckView, ExposureView, Inside, MoonView, brief};
 pub use sun_brief::{PlaceDay, SunBrief, sun_brief};

@@ -2,8 +2,12 @@
 
 mod boundary;
 mod deck;
+mod exposure;
+mod moon;
 
 pub use deck::DeckView;
+pub use exposure::{ExposureView, Inside};
+pub use moon::MoonView;
 
 use crate::intake::{Flight, PolarLimits};
 use crate::light::{
@@ -47,6 +51,10 @@ pub struct Brief {
     pub at_lowest: Sample,
     /// The Sun each minute from take-off, and at landing.
     pub minutes: Vec<Sample>,
+    /// The Moon.
+    pub moon: MoonView,
+    /// The brightness outside.
+    pub exposure: ExposureView,
     /// The circles crossed.
     pub circles: Vec<CircleCrossing>,
     /// Where the polar areas were taken to begin.
@@ -77,6 +85,8 @@ pub fn brief(flight: Flight, sky: &Sky) -> Result<Brief, FlightError> {
     let at_waypoints = path.waypoints_s().iter().map(|&at_s| lookout.at(at_s)).collect();
     let (at_highest, at_lowest) = (lookout.at(light.highest.at_s), lookout.at(light.lowest.at_s));
     let minutes = lookout.every_s(STEP_S);
+    let moon = moon::view((&path, sky), &light, &minutes);
+    let exposure = exposure::view((&path, sky), (&trace, &moon.moon), &minutes, &flight.brightness);
     let polar_limits = flight.polar_limits.unwrap_or_default();
     Ok(Brief {
         circles: circles(&path, sky.true_obliquity(path.middle()), polar_limits),
@@ -94,6 +104,8 @@ pub fn brief(flight: Flight, sky: &Sky) -> Result<Brief, FlightError> {
         at_highest,
         at_lowest,
         minutes,
+        moon,
+        exposure,
         light,
         path,
         flight,

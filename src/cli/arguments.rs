@@ -60,6 +60,10 @@ pub(super) struct BriefRequest {
     /// Latitude in degrees south at which the South Polar Area begins [default: 60]
     #[arg(long, value_name = "DEGREES")]
     pub(super) south_polar_area: Option<f64>,
+
+    /// Levels of brightness in lux to count the time above, for flight files that give none [default: 1,10,100,1000,10000]
+    #[arg(long, value_name = "LUX,...", value_delimiter = ',', allow_hyphen_values = true)]
+    pub(super) lux_levels: Option<Vec<f64>>,
 }
 
 #[derive(Debug, Args)]

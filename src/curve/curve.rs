@@ -1,7 +1,7 @@
 //! A smooth function of time on one interval, held as the polynomial through its values at Chebyshev–Lobatto nodes.
 
 use super::nodes::{MAX_NODES, SIZES, table};
-use super::{Bandwidth, nodes_for};
+use super::{Bandwidth, Near, nodes_for};
 use crate::units::Four;
 
 /// One smooth piece of a function of time.
@@ -26,6 +26,20 @@ impl Curve {
     /// Within 2e−9 of an `f` that the derivation in [`super::error_bound`] holds for.
     pub fn through(begin_s: f64, end_s: f64, band: Bandwidth, f: impl Fn(Four) -> Four) -> Option<Self> {
         let size = nodes_for(band, end_s - begin_s)?;
+        Some(Self::sampled((begin_s, end_s), size, band.total_rad_s(), f))
+    }
+
+    /// The same for a body whose parallax counts.
+    ///
+    /// # Accuracy
+    /// Within 2e−9 of an `f` that the derivation in `curve/near.rs` holds for.
+    pub fn through_near(span: (f64, f64), near: Near, f: impl Fn(Four) -> Four) -> Option<Self> {
+        let size = near.size_for(span.1 - span.0)?;
+        Some(Self::sampled(span, size, near.turn_rad_s(), f))
+    }
+
+    #[inline]
+    fn sampled((begin_s, end_s): (f64, f64), size: usize, turn_rad_s: f64, f: impl Fn(Four) -> Four) -> Self {
         let (mid_s, half_s) = (f64::midpoint(begin_s, end_s), (end_s - begin_s) / 2.0);
         let mut values = [0.0; MAX_NODES];
         // every size is a multiple of four
@@ -34,17 +48,13 @@ impl Curve {
         {
             *values = f(Four::splat(mid_s) + Four::splat(half_s) * Four::from(*nodes)).to_array();
         }
-        Some(Self::from_values(mid_s, half_s, size, band, values))
-    }
-
-    fn from_values(mid_s: f64, half_s: f64, size: usize, band: Bandwidth, values: [f64; MAX_NODES]) -> Self {
         let n = SIZES[size];
         let table = table(size);
         let mut coefficients = [0.0; MAX_NODES];
         let mut slopes = [0.0; MAX_NODES];
         multiply(&table.to_coefficients, &values[..n], &mut coefficients);
         multiply(&table.to_slopes, &values[..n], &mut slopes);
-        Self { mid_s, half_s, size, values, slopes, coefficients, turn_rad: band.total_rad_s() * half_s }
+        Self { mid_s, half_s, size, values, slopes, coefficients, turn_rad: turn_rad_s * half_s }
     }
 
     /// The number of nodes.

@@ -10,6 +10,7 @@
 //! every excursion of f across a level that is higher than ε is found, however short it is, and none is invented.
 
 mod bound;
+mod near;
 mod nodes;
 mod curve;
 mod turning;
@@ -17,5 +18,6 @@ mod root;
 
 pub use bound::{Bandwidth, error_bound, nodes_for};
 pub use curve::Curve;
+pub use near::Near;
 pub use nodes::{MAX_NODES, coefficients, lobatto};
 pub use turning::TurningPoints;

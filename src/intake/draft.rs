@@ -1,5 +1,6 @@
 //! A flight as given, each value with where it stands, and the checks that make it a [`Flight`].
 
+use super::brightness::Brightness;
 use super::flight::{Flight, PolarLimits, RoutePoint, Stop};
 use super::place::Named;
 use super::problem::{IntakeError, Problem};
@@ -58,6 +59,7 @@ pub(super) struct Draft {
     pub(super) waypoints: Vec<Given<RoutePoint>>,
     pub(super) polar_limits: Option<PolarLimits>,
     pub(super) dut1: Option<Dut1>,
+    pub(super) brightness: Brightness,
 }
 
 /// RFC 3339 in UTC to the second, for messages.
@@ -98,6 +100,7 @@ impl Draft {
             waypoints: self.waypoints.into_iter().map(|w| w.value).collect(),
             polar_limits: self.polar_limits,
             dut1: self.dut1,
+            brightness: self.brightness,
         })
     }
 

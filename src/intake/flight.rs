@@ -1,5 +1,6 @@
 //! A flight as its planner holds it: two ends, two times, perhaps points between.
 
+use super::brightness::Brightness;
 use crate::units::{Dut1, Instant, Latitude, Metres, Place, PlaceError};
 use chrono_tz::Tz;
 
@@ -26,6 +27,8 @@ pub struct Flight {
     pub polar_limits: Option<PolarLimits>,
     /// UT1 − UTC on its date, if the planner knows it.
     pub dut1: Option<Dut1>,
+    /// What the planner asks about the brightness outside.
+    pub brightness: Brightness,
 }
 
 /// One end of a flight.

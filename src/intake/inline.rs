@@ -1,5 +1,6 @@
 //! A flight given on the command line instead of in a file.
 
+use super::brightness::Brightness;
 use super::draft::{Draft, Given, Origin};
 use super::flight::Flight;
 use super::place::{Named, place};
@@ -50,6 +51,7 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
         waypoints: Vec::new(),
         polar_limits: None,
         dut1: None,
+        brightness: Brightness::default(),
     };
     draft.checked()
 }

@@ -3,6 +3,7 @@
 //! Is given text and the name of its source; never opens a file. What needs a geodesic (speeds, a flight of no length)
 //! is checked where the geodesics are, in `path`.
 
+mod brightness;
 mod flight;
 mod problem;
 mod place;
@@ -11,6 +12,7 @@ mod draft;
 mod file;
 mod inline;
 
+pub use brightness::{Brightness, BrightnessError, lux_levels};
 pub use draft::Origin;
 pub use file::flight_file;
 pub use flight::{Flight, PolarLimits, RoutePoint, Stop};

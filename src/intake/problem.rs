@@ -1,5 +1,6 @@
 //! What can be wrong with a flight as it was given, where it stands, and the cure.
 
+use super::brightness::BrightnessError;
 use super::draft::Origin;
 use super::file::{FIELDS, PLACE_FIELDS, POLAR_FIELDS, WAYPOINT_FIELDS};
 use crate::places::UnknownAerodrome;
@@ -61,6 +62,9 @@ pub enum Problem {
     /// A UT1 − UTC that cannot be.
     #[error(transparent)]
     Dut1(#[from] Dut1Error),
+    /// A level or share of light that cannot be.
+    #[error(transparent)]
+    Brightness(#[from] BrightnessError),
     /// A code that is not known.
     #[error(transparent)]
     UnknownAerodrome(UnknownAerodrome),

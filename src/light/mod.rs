@@ -15,11 +15,18 @@ mod along;
 mod sample;
 mod deck;
 mod trust;
+mod moon;
+mod exposure;
 
 pub use along::{Light, along, beneath};
 pub use deck::{Deck, DeckSegment, deck};
+pub use exposure::{Above, Exposure, LightMeter, LuxAt, USUAL_LEVELS, exposure};
 pub use limit::{Direction, Event, Limit, State};
 pub use meet::{Crossing, TOUCH, Touch};
+pub use moon::{
+    MOON_TOUCH, MoonCrossing, MoonLight, MoonLookout, MoonSample, MoonSegment, MoonTouch, Moonlit,
+    moon_beneath,
+};
 pub use sample::{Lookout, Sample};
 pub use segment::{Segment, StateSeconds};
 pub use trace::{Peak, Trace};

@@ -1,6 +1,7 @@
 //! The built program, run as its users run it.
 
 mod batch;
+mod brightness;
 mod forms;
 mod hostile;
 mod raw;

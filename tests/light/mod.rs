@@ -1,7 +1,9 @@
 //! The light along flights.
 
 mod crossings;
+mod exposure;
 mod grazing;
+mod moon;
 mod properties;
 
 use crate::tables::{Row, instant, number, rows};
@@ -28,6 +30,7 @@ pub(crate) fn flight(name: &str, takeoff: gloamline::units::Instant, points: &[(
         waypoints: waypoints.collect(),
         polar_limits: None,
         dut1: None,
+        brightness: gloamline::intake::Brightness::default(),
     }
 }
 

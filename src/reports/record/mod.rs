@@ -3,6 +3,10 @@
 mod aloft;
 mod beneath;
 mod flight;
+mod illuminance;
+mod moon;
+
+pub(super) use illuminance::figures;
 
 use crate::Brief;
 use crate::label::clock::machine;
@@ -20,6 +24,8 @@ pub(super) struct Record {
     beneath: beneath::BeneathRecord,
     #[serde(skip_serializing_if = "Option::is_none")]
     aloft: Option<aloft::AloftRecord>,
+    moon: moon::MoonRecord,
+    illuminance: illuminance::IlluminanceRecord,
     circles: Vec<CircleRecord>,
     northernmost: PointRecord,
     southernmost: PointRecord,
@@ -50,6 +56,8 @@ impl Record {
             flight: flight::FlightRecord::of(brief),
             beneath: beneath::BeneathRecord::of(brief),
             aloft: brief.deck.as_ref().map(|view| aloft::AloftRecord::of(brief, view)),
+            moon: moon::MoonRecord::of(brief),
+            illuminance: illuminance::IlluminanceRecord::of(brief),
             circles: circles(brief),
             northernmost: point(brief, brief.northernmost),
             southernmost: point(brief, brief.southernmost),

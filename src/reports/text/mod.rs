@@ -4,6 +4,8 @@ mod format;
 mod head;
 mod beneath;
 mod aloft;
+mod moon;
+mod brightness;
 mod route;
 
 use super::table::wrapped;
@@ -22,6 +24,8 @@ pub fn text(brief: &Brief) -> String {
         beneath::crossings(brief),
         beneath::touches(brief),
         aloft::deck(brief),
+        moon::moon(brief),
+        brightness::brightness(brief),
         route::extremes(brief),
         route::circles(brief),
         cautions(brief),
