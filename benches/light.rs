@@ -1,4 +1,5 @@
 //! How long the heart of the matter takes: `cargo bench --bench light`.
+#![allow(clippy::unwrap_used, reason = "a benchmark on a flight that cannot be flown should stop")]
 
 use chrono::{DateTime, Utc};
 use divan::{Bencher, black_box};

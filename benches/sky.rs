@@ -1,4 +1,5 @@
 //! How long the horizon and the Moon take: `cargo bench --bench sky`.
+#![allow(clippy::unwrap_used, reason = "a benchmark on a flight that cannot be flown should stop")]
 
 use divan::{Bencher, black_box};
 use gloamline::sky::{

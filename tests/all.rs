@@ -9,6 +9,6 @@ mod places;
 mod sky;
 mod path;
 mod light;
-mod reports;
 mod charts;
+mod reports;
 mod cli;

@@ -291,8 +291,8 @@ fn a_breach_of_a_wall_is_caught_with_its_line() {
         ),
         (
             "src/curve/root.rs",
-            "mod tests {\n    use super::super::super::units::Angle;\n}",
-            "src/curve/root.rs:2: curve may not import units::Angle",
+            "mod tests {\n    use super::super::super::places::RunwayEnd;\n}",
+            "src/curve/root.rs:2: curve may not import places::RunwayEnd",
         ),
         ("src/path/leg.rs", "use crate::Brief;", "src/path/leg.rs:1: path may not use the root's Brief"),
         (

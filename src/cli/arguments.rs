@@ -14,7 +14,7 @@ pub(super) struct Arguments {
 #[derive(Debug, Subcommand)]
 pub(super) enum Command {
     /// Brief flights: states, sunrises and sunsets, twilights and circles along the route
-    Brief(BriefRequest),
+    Brief(Box<BriefRequest>),
     /// The Sun's almanac quantities at an instant, a place's day, or a year's equinoxes and solstices
     Sun(SunRequest),
 }

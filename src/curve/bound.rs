@@ -17,8 +17,8 @@
 //! * u is stretched by at most e^(ω |Im t|); its slow drift (a degree a day) and the parallax (4.3e−5 of the whole)
 //!   add less than 1 %.
 //!
-//! Together M ≤ 1.2 e^(h (z_s + 1.158 z_p)) with h = (ρ − 1/ρ)/2, z_s = ωT/2, z_p = vT/(2b), for each ρ with
-//! 1.158 z_p h ≤ Y. The bound below takes the best such ρ. A body as near as the Moon has a bound of its own, in
+//! Together `M ≤ 1.2 e^(h (z_s + 1.158 z_p))` with h = (ρ − 1/ρ)/2, `z_s = ωT/2`, `z_p = vT/(2b)`, for each ρ with
+//! `1.158 z_p h ≤ Y`. The bound below takes the best such ρ. A body as near as the Moon has a bound of its own, in
 //! [`super::near`].
 
 use super::nodes::{MAX_NODES, SIZES};

@@ -12,12 +12,12 @@
 mod bound;
 mod near;
 mod nodes;
-mod curve;
+mod polynomial;
 mod turning;
 mod root;
 
 pub use bound::{Bandwidth, error_bound, nodes_for};
-pub use curve::Curve;
 pub use near::Near;
 pub use nodes::{MAX_NODES, coefficients, lobatto};
+pub use polynomial::Curve;
 pub use turning::TurningPoints;

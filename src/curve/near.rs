@@ -4,13 +4,13 @@
 //! What is searched is n·(u − p)/r with p = P/d, the observer's place over the body's distance, |p| ≤ π ≤ 1/55, and
 //! r = √(1 − 2 p·u + p·p). Unlike the Sun's, this square root has zeros near the real axis (an observer at γ from the
 //! body's foot: cos γ = (1 + π²)/2π, so |Im γ| = 4.0), and the ellipse must stay away from them. In the strip of
-//! [`super::bound`] |P| is stretched by 1.23 more than n (1/√(1 − e² n_z²)). Write E = e^(h (z_s + 1.158 z_p)); then
+//! [`super::bound`] |P| is stretched by 1.23 more than n (`1/√(1 − e² n_z²)`). Write `E = e^(h (z_s + 1.158 z_p))`; then
 //! |r² − 1| ≤ 2 π · 1.23 · 1.2 E + (1.23 · 1.2 π E)², which is below 0.89 as long as E ≤ 14, so that |1/r| ≤ 3.0 and
 //! M ≤ 3.0 (1.2 E + 0.03) ≤ 3.7 E. The body's own motion against the stars, up to 16° a day for the Moon, is counted in its
 //! turning rate, and the slow change of d lies within 1/55 (the Moon comes no nearer than 55.8 radii).
 //!
 //! The same expansion bounds the derivatives for [`Curve::turning_points`](super::Curve::turning_points):
-//! 1/r = Σ πᵏ P_k(cos γ), a term of degree k + 1 turns k + 1 times as fast, and so the second derivative grows by at most
+//! `1/r = Σ πᵏ P_k(cos γ)`, a term of degree k + 1 turns k + 1 times as fast, and so the second derivative grows by at most
 //! Σ πᵏ (k + 1)² ≤ 1.08 and the third by Σ πᵏ (k + 1)³ ≤ 1.16. Counting the turn 1.06 times covers both.
 
 use super::bound::{Bandwidth, STRIP, STRIP_SPEED, TARGET, on_ellipse};

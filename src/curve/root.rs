@@ -1,6 +1,6 @@
 //! The one crossing of a level on an interval where a curve is monotone.
 
-use super::curve::Curve;
+use super::polynomial::Curve;
 
 /// Scaled time, the curve's gap to the level and its slope there.
 #[derive(Clone, Copy)]
@@ -62,9 +62,9 @@ impl Curve {
             let [value, slope] = self.value_and_slope_x(x);
             let gap = value - level;
             if (gap < 0.0) == rising {
-                low = x
+                low = x;
             } else {
-                high = x
+                high = x;
             }
             let step = gap / slope;
             let next = x - step;
@@ -110,7 +110,7 @@ mod tests {
     #[test]
     fn a_level_is_met_where_the_sine_is_that_high() {
         let band = Bandwidth { body_rad_s: 1.0, path_rad_s: 0.0 };
-        let curve = Curve::through(0.0, 3.0, band, |t| t.sin()).unwrap();
+        let curve = Curve::through(0.0, 3.0, band, wide::f64x4::sin).unwrap();
         let half_pi = std::f64::consts::FRAC_PI_2;
         for level in [0.0001_f64, 0.5, 0.999_999] {
             assert!((curve.meets(level, true, 0.0, half_pi) - level.asin()).abs() < 3e-6, "{level}");

@@ -9,7 +9,7 @@
 //!   (|d(1/M)/ds| ≤ 0.0101/M²). With a body turning at ω the product rule gives |s⁽ᵏ⁾| ≤ c (ω + v/R)ᵏ;
 //!   B₂ = 1.01 z², B₃ = 1.10 z³ cover the parallax and the body's own drift as well, and small constants cover the
 //!   interpolation error's derivatives (at most ε n⁴/3 and ε n⁶/15);
-//! * from the coefficients, |p″| ≤ Σ |c_k| k²(k²−1)/3 and |p‴| ≤ Σ |c_k| k²(k²−1)(k²−4)/15 (the derivatives of T_k are
+//! * from the coefficients, `|p″| ≤ Σ |c_k| k²(k²−1)/3` and `|p‴| ≤ Σ |c_k| k²(k²−1)(k²−4)/15` (the derivatives of `T_k` are
 //!   largest at the ends), which is far smaller for an observer who hardly moves against the Sun, at a pole say.
 //!
 //! On a cell of width w with end slopes a, b of one sign, |a| + |b| > B₂ w excludes a zero of the slope: to reach zero
@@ -18,7 +18,7 @@
 //! halved. Halving ends where the curve cannot move by more than [`FLAT`] within the cell: nothing higher than that
 //! is lost there.
 
-use super::curve::Curve;
+use super::polynomial::Curve;
 
 /// The most turning points kept: a series of 24 terms has no more than 22.
 const MOST: usize = 32;
@@ -149,9 +149,9 @@ impl Curve {
         for _ in 0..60 {
             let [_, slope, bend] = self.jet_x(x);
             if slope * cell.slope_from > 0.0 {
-                low = x
+                low = x;
             } else {
-                high = x
+                high = x;
             }
             let next = x - slope / bend;
             let next = if next >= low && next <= high { next } else { f64::midpoint(low, high) };

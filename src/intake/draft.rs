@@ -4,6 +4,7 @@ use super::brightness::Brightness;
 use super::flight::{Flight, PolarLimits, RoutePoint, Stop};
 use super::place::Named;
 use super::problem::{IntakeError, Problem};
+use crate::places::Aerodrome;
 use crate::units::{Dut1, Instant, Metres};
 use std::ops::RangeInclusive;
 
@@ -175,6 +176,6 @@ fn stop(named: Named) -> Stop {
         label: named.label,
         name: named.aerodrome.map(|a| a.name().to_string()),
         place: named.place,
-        zone: named.aerodrome.map(|a| a.zone()),
+        zone: named.aerodrome.map(Aerodrome::zone),
     }
 }

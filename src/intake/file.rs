@@ -161,7 +161,7 @@ struct LineCounter<'t> {
 impl LineCounter<'_> {
     fn line_of(&mut self, byte: usize) -> usize {
         if byte > self.byte {
-            self.line += self.text.as_bytes()[self.byte..byte].iter().filter(|&&b| b == b'\n').count();
+            self.line += self.text.get(self.byte..byte).map_or(0, |passed| passed.matches('\n').count());
             self.byte = byte;
         }
         self.line

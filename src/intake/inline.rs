@@ -6,6 +6,7 @@ use super::flight::Flight;
 use super::place::{Named, place};
 use super::problem::{IntakeError, Problem};
 use super::time::{duration_s, instant};
+use crate::places::Aerodrome;
 
 /// The texts of a flight's command-line options.
 #[derive(Debug, Clone, Default)]
@@ -63,7 +64,7 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
 pub fn place_argument(argument: &'static str, text: &str) -> Result<super::Stop, IntakeError> {
     let Given { value: Named { label, place, aerodrome }, .. } = read(argument, text, place)?;
     let name = aerodrome.map(|a| a.name().to_string());
-    Ok(super::Stop { label, name, place, zone: aerodrome.map(|a| a.zone()) })
+    Ok(super::Stop { label, name, place, zone: aerodrome.map(Aerodrome::zone) })
 }
 
 /// An instant given on its own.

@@ -71,6 +71,12 @@ pub(crate) fn offset(instant: Instant, zone: Tz) -> String {
     if minutes == 0 { format!("UTC{sign}{hours}") } else { format!("UTC{sign}{hours}:{minutes:02}") }
 }
 
+/// A zone's offset over a time, or both of its offsets where its clocks change: `UTC−5, then UTC−4`.
+pub(crate) fn offsets(begin: Instant, end: Instant, zone: Tz) -> String {
+    let (first, last) = (offset(begin, zone), offset(end, zone));
+    if first == last { first } else { format!("{first}, then {last}") }
+}
+
 /// `14 h 55 min`, to the nearest minute; seconds are given below an hour.
 pub(crate) fn duration(seconds: f64) -> String {
     let s = seconds.round() as i64;

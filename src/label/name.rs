@@ -9,6 +9,9 @@ const LONGEST: usize = 120;
 pub fn one_line(name: &str) -> String {
     let visible: String = name.chars().map(|c| if is_hidden(c) { ' ' } else { c }).collect();
     let words = visible.split_whitespace().collect::<Vec<_>>().join(" ");
+    if words.is_empty() {
+        return "(unnamed)".to_string();
+    }
     if words.chars().count() <= LONGEST {
         return words;
     }

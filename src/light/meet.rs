@@ -88,9 +88,9 @@ pub(super) fn search(trace: &Trace, level: f64, margin: f64, mut tell: impl FnMu
     let peaks = trace.peaks();
     let last = peaks.len() - 1;
     let strict = |i: usize| if peaks[i].sine >= level { Side::Above } else { Side::Below };
-    let side = |i: usize| match (peaks[i].sine - level).abs() < margin && i > 0 && i < last {
-        true => Side::Undecided,
-        false => strict(i),
+    let side = |i: usize| {
+        let near = (peaks[i].sine - level).abs() < margin && i > 0 && i < last;
+        if near { Side::Undecided } else { strict(i) }
     };
     let mut from = 0;
     for to in 1..=last {
@@ -117,5 +117,8 @@ fn touch(run: &[Peak], level: f64) -> Option<Peak> {
     let from_above = run[0].sine >= level;
     let deepest =
         |a: &&Peak, b: &&Peak| if from_above { a.sine.total_cmp(&b.sine) } else { b.sine.total_cmp(&a.sine) };
-    inner.iter().min_by(deepest).copied()
+    let peak = inner.iter().min_by(deepest)?;
+    // a Sun that only passes from one curve to the next here does not turn
+    let lies_beyond = |end: &Peak| if from_above { peak.sine < end.sine } else { peak.sine > end.sine };
+    (lies_beyond(&run[0]) && lies_beyond(&run[run.len() - 1])).then_some(*peak)
 }

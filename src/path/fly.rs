@@ -117,7 +117,7 @@ fn stretch(fixes: &[Fix<'_>], legs: &mut Vec<Leg>, passed_s: &mut Vec<f64>) -> R
     let lines: Vec<Line> = fixes.windows(2).map(|pair| Line::between(pair[0].place, pair[1].place)).collect();
     let length_m: f64 = lines.iter().map(Line::length_m).sum();
     let speed_m_s = length_m / (end_s - begin_s);
-    if length_m > 0.0 && !(speed_m_s <= FASTEST_KT * KNOT_M_S) {
+    if length_m > 0.0 && speed_m_s > FASTEST_KT * KNOT_M_S {
         return Err(FlightError::TooFast {
             from: first.label.to_string(),
             to: last.label.to_string(),

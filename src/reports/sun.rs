@@ -2,7 +2,7 @@
 
 use super::record::rounded;
 use super::table::{columns, wrapped};
-use crate::label::clock::{day_and_second, local_minute, machine, offset, second};
+use crate::label::clock::{day_and_second, local_minute, machine, offsets, second};
 use crate::label::one_line;
 use crate::label::words::{event_key, limit_key, spoken, state_key};
 use crate::light::State;
@@ -59,7 +59,10 @@ fn cautions(brief: &SunBrief) -> Vec<String> {
 
 fn day_text(day: &PlaceDay) -> String {
     let name = day.stop.name.as_deref().map_or(String::new(), |name| format!(" ({})", one_line(name)));
-    let clock = day.stop.zone.map_or("local mean time".to_string(), |zone| offset(day.begin, zone));
+    let clock = day.stop.zone.map_or("local mean time".to_string(), |zone| {
+        // the day's end belongs to the next one
+        offsets(day.begin, day.begin.after_s(day.seconds - 1.0), zone)
+    });
     let mut out = format!("{}{name}   {}, {clock}\n", day.stop.label, day.date.format("%-d %b %Y"));
     let now = [[
         "Sun now".to_string(),

@@ -38,7 +38,8 @@ pub(super) fn wrapped(lead: &str, text: &str, width: usize) -> String {
         }
     }
     let begin = |i: usize| if i == 0 { lead.to_string() } else { " ".repeat(indent) };
-    lines.iter().enumerate().map(|(i, line)| format!("{}{line}\n", begin(i))).collect()
+    let whole: Vec<String> = lines.iter().enumerate().map(|(i, line)| begin(i) + line).collect();
+    whole.join("\n") + "\n"
 }
 
 #[cfg(test)]

@@ -11,7 +11,8 @@ pub(super) fn tt_minus_utc_s(instant: Instant) -> f64 {
     let date = instant.utc();
     // the routine warns of years long after its release with an error code and keeps the last value otherwise
     let year = date.year().min(*YEARS.end()).max(*YEARS.start());
-    let tai_minus_utc = sofars::ts::dat(year, date.month() as i32, date.day() as i32, 0.0).unwrap_or(37.0);
+    let tai_minus_utc =
+        sofars::ts::dat(year, date.month().cast_signed(), date.day().cast_signed(), 0.0).unwrap_or(37.0);
     tai_minus_utc + TT_MINUS_TAI_S
 }
 

@@ -65,6 +65,18 @@ fn a_hostile_name_stays_in_its_folder_and_is_mere_words() {
         let json: serde_json::Value = serde_json::from_str(&read(&out, ".json")).unwrap();
         assert_eq!(json["flight"]["name"], name);
         assert_csv_is_inert(&read(&out, ".csv"), name);
+        assert_svg_is_inert(&read(&out, ".svg"), name);
+    }
+}
+
+fn assert_svg_is_inert(text: &str, name: &str) {
+    assert!(!text.contains(is_hidden), "{name:?}");
+    let document = roxmltree::Document::parse(text).unwrap_or_else(|error| panic!("{name:?}: {error}"));
+    for node in document.descendants().filter(roxmltree::Node::is_element) {
+        assert!(!["script", "foreignObject", "a", "image"].contains(&node.tag_name().name()), "{name:?}");
+        let links = node.attributes().filter(|own| own.name() == "href");
+        assert!(links.into_iter().all(|own| own.value().starts_with('#')), "{name:?}");
+        assert!(node.attributes().all(|own| !own.name().starts_with("on")), "{name:?}");
     }
 }
 

@@ -1,10 +1,12 @@
 //! The light along flights.
 
 mod crossings;
+mod deck;
 mod exposure;
 mod grazing;
 mod moon;
 mod properties;
+mod trust;
 
 use crate::tables::{Row, instant, number, rows};
 use gloamline::intake::{Flight, RoutePoint, Stop};

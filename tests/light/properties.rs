@@ -178,7 +178,7 @@ pub(crate) fn points_of(path: &Path) -> Vec<(Place, f64)> {
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig::with_cases(120))]
+    #![proptest_config(ProptestConfig::with_cases(80))]
 
     #[test]
     fn the_light_of_any_flight_is_what_sampling_shows(flight in any_flight()) {

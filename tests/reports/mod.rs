@@ -1,5 +1,6 @@
-//! The committed reports, and the README's commands.
+//! The reports against what they were made from, the committed ones, and the README's commands.
 
+mod clocks;
 mod fresh;
 mod readme;
 mod json;

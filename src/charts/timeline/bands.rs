@@ -2,9 +2,9 @@
 //!
 //! Knows nothing of the flight.
 
-use super::frame::Frame;
+use super::frame::{Frame, degrees};
 use super::layout::{MARGIN, RIGHT};
-use super::style::{INK, MUTED, RULE, SMALL, TEXT, fitted, letters, look};
+use super::style::{DECK, INK, MUTED, RULE, SMALL, TEXT, fitted, letters, look};
 use crate::charts::canvas::{Across, Canvas, Dash, Level, Look, Point, Rect, Stroke, TextStyle, Turn};
 use crate::charts::labels::apart;
 use crate::label::words::{limit_elevation, spoken, state_key};
@@ -50,7 +50,7 @@ pub(super) fn draw(canvas: &mut Canvas, frame: &Frame) {
 }
 
 /// The frame, the axis at its left, and limits and states at its right.
-pub(super) fn draw_edges(canvas: &mut Canvas, frame: &Frame) {
+pub(super) fn draw_edges(canvas: &mut Canvas, frame: &Frame, deck_deg: Option<f64>) {
     canvas.rect(frame.plot, Look::outlined(Stroke::new(INK, 1.0)));
     let number = letters(TEXT).anchored(Across::End, Level::Middle);
     let left = frame.plot.left;
@@ -65,30 +65,42 @@ pub(super) fn draw_edges(canvas: &mut Canvas, frame: &Frame) {
     let x = left - 100.0;
     canvas.text("Sun's elevation beneath the aircraft", Point::new(x, middle), &upwards);
     canvas.text("geometric, of its centre", Point::new(x + 22.0, middle), &muted);
-    limits(canvas, frame);
-    names(canvas, frame);
+    limits(canvas, frame, deck_deg);
+    names(canvas, frame, deck_deg.map(|deg| frame.y(deg)));
 }
 
-/// The limits at the right edge, moved apart where they would touch.
-fn limits(canvas: &mut Canvas, frame: &Frame) {
-    let shown: Vec<Limit> =
-        Limit::ALL.into_iter().filter(|l| frame.span.holds(l.elevation().deg())).collect();
-    let ys: Vec<f64> = shown.iter().map(|l| frame.y(l.elevation().deg())).collect();
-    let style = letters(TEXT).bold().anchored(Across::Start, Level::Middle);
+/// The limits at the right edge, the deck's among them, moved apart where they would touch.
+fn limits(canvas: &mut Canvas, frame: &Frame, deck_deg: Option<f64>) {
+    let own = Limit::ALL.map(|limit| (limit.elevation().deg(), limit_elevation(limit).to_string(), INK));
+    let deck = deck_deg.map(|deg| (deg, format!("deck {}", degrees(deg, 1)), DECK));
+    let mut shown: Vec<_> = own.into_iter().chain(deck).filter(|(deg, ..)| frame.span.holds(*deg)).collect();
+    shown.sort_by(|a, b| b.0.total_cmp(&a.0));
+    let ys: Vec<f64> = shown.iter().map(|(deg, ..)| frame.y(*deg)).collect();
     let right = frame.plot.right;
     let edge = (frame.plot.top, frame.plot.bottom - LABEL_ROOM / 2.0);
-    for ((limit, &y), label_y) in shown.iter().zip(&ys).zip(apart(&ys, LABEL_ROOM, edge)) {
+    for (((_, label, ink), &y), label_y) in shown.iter().zip(&ys).zip(apart(&ys, LABEL_ROOM, edge)) {
+        let style = TextStyle { ink: *ink, ..letters(TEXT).bold().anchored(Across::Start, Level::Middle) };
         let lead = [Point::new(right, y), Point::new(right + 4.0, y), Point::new(right + 10.0, label_y)];
-        canvas.line(&lead, Stroke::new(INK, 1.0));
-        canvas.text(limit_elevation(*limit), Point::new(right + 13.0, label_y), &style);
+        canvas.line(&lead, Stroke::new(*ink, 1.0));
+        canvas.text(label, Point::new(right + 13.0, label_y), &style);
+    }
+}
+
+/// The larger part of a band that the deck's own label parts.
+fn roomier(band: Rect, deck_y: Option<f64>) -> Rect {
+    match deck_y.filter(|y| (band.top..band.bottom).contains(y)) {
+        Some(y) if y - band.top > band.bottom - y => Rect { bottom: y, ..band },
+        Some(y) => Rect { top: y, ..band },
+        None => band,
     }
 }
 
 /// The states' names at the right edge, in bands that have room.
-fn names(canvas: &mut Canvas, frame: &Frame) {
+fn names(canvas: &mut Canvas, frame: &Frame, deck_y: Option<f64>) {
     let style = TextStyle { ink: MUTED, ..letters(TEXT).anchored(Across::Start, Level::Middle) };
     for state in State::ALL {
         let Some(band) = band(state, frame) else { continue };
+        let band = roomier(band, deck_y);
         let x = frame.plot.right + 13.0;
         let middle = f64::midpoint(band.top, band.bottom);
         let name = spoken(state_key(state));

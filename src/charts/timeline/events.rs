@@ -47,7 +47,12 @@ pub(super) fn events(brief: &Brief) -> Vec<Event> {
         is_numbered: false,
         ..event(sample, format!("{what} {}", degrees(sample.elevation.0.deg(), decimals)), Marker::Diamond)
     });
-    let mut events: Vec<Event> = crossings.chain(touches).chain(peaks).collect();
+    let deck = brief.deck.iter().flat_map(|view| view.deck.crossings.iter().zip(&view.at_crossings));
+    let deck = deck.map(|(crossing, sample)| {
+        let name = if crossing.direction == Direction::Rising { "deck sunrise" } else { "deck sunset" };
+        event(sample, name.to_string(), Marker::Circle)
+    });
+    let mut events: Vec<Event> = crossings.chain(touches).chain(deck).chain(peaks).collect();
     events.sort_by(|a, b| a.seen.at_s.total_cmp(&b.seen.at_s));
     events
 }

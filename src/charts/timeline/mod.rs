@@ -10,6 +10,7 @@ mod heading;
 mod bands;
 mod gates;
 mod curve;
+mod deck;
 mod events;
 mod captions;
 mod clocks;
@@ -55,7 +56,8 @@ pub fn timeline(brief: &Brief) -> Result<Canvas, CanvasError> {
     bands::draw(&mut canvas, &frame);
     clocks::draw_grid(&mut canvas, &clocks, &frame);
     gates.draw(&mut canvas, &frame);
-    bands::draw_edges(&mut canvas, &frame);
+    bands::draw_edges(&mut canvas, &frame, deck::limit(brief).map(|line| line[1].deg));
+    deck::draw(&mut canvas, brief, &frame);
     curve::draw(&mut canvas, &curve, &frame);
     captions.draw(&mut canvas, &events, &frame);
     strip::draw(&mut canvas, &brief.light.segments, (layout.strip(), &frame));

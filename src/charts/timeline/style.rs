@@ -12,6 +12,7 @@ pub(super) const MUTED: Ink = Ink::hex(0x4b5462);
 pub(super) const RULE: Ink = Ink::hex(0x7d8694);
 pub(super) const CURVE: Ink = Ink::hex(0x10161f);
 pub(super) const CIRCLE: Ink = Ink::hex(0x7a1f3d);
+pub(super) const DECK: Ink = Ink::hex(0x0b5a52);
 pub(super) const PLATE: Ink = Ink::WHITE.with_alpha(0.88);
 
 /// The smallest letters of the picture.

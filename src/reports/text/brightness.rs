@@ -40,7 +40,7 @@ fn levels(some: &[Above]) -> String {
         0.0 => "never".to_string(),
         seconds => duration(seconds),
     };
-    columns(&[row("brighter than", &|above| format!("{} lx", lux(above.level.0))), row("", &span)])
+    columns(&[row("brighter than", &|above| format!("{} lx", above.level.0)), row("", &span)])
 }
 
 fn inside(inside: Inside) -> String {
@@ -57,8 +57,11 @@ fn inside(inside: Inside) -> String {
 
 /// Three figures, thousands parted by commas.
 fn lux(value: f64) -> String {
+    if value <= 0.0 {
+        return "0".to_string();
+    }
     if value < 1.0 {
-        let digits = if value > 0.0 { (2 - value.log10().floor() as i32).clamp(2, 6) } else { 0 };
+        let digits = (2 - value.log10().floor() as i32).clamp(2, 6);
         let text = format!("{value:.*}", digits as usize);
         return text.trim_end_matches('0').trim_end_matches('.').to_string();
     }

@@ -3,7 +3,7 @@
 use super::format::{place, sun};
 use crate::Brief;
 use crate::intake::{Flight, Stop};
-use crate::label::clock::{date, day_and_second, duration, local_day_and_minute, offset};
+use crate::label::clock::{date, day_and_second, duration, local_day_and_minute, offsets};
 use crate::label::one_line;
 use crate::label::words::{limit_key, spoken, state_key};
 use crate::reports::table::columns;
@@ -48,7 +48,7 @@ impl Clocks {
         for stop in [&flight.from, &flight.to] {
             match (stop.zone, clocks.last_mut()) {
                 (Some(zone), Some((label, other))) if zone == *other => {
-                    *label = format!("{label}, {}", stop.label)
+                    *label = format!("{label}, {}", stop.label);
                 }
                 (Some(zone), _) => clocks.push((stop.label.clone(), zone)),
                 (None, _) => {}
@@ -73,7 +73,7 @@ impl Clocks {
 pub(super) fn ends(brief: &Brief) -> String {
     let flight = &brief.flight;
     let clocks = Clocks::of(flight);
-    let head = |label: &str, zone| format!("{label} ({})", offset(flight.takeoff, zone));
+    let head = |label: &str, zone| format!("{label} ({})", offsets(flight.takeoff, flight.landing, zone));
     let mut rows = vec![clocks.row(
         "          UTC".into(),
         head,
