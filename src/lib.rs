@@ -9,6 +9,7 @@ pub mod intake;
 pub mod path;
 pub mod sky;
 pub mod light;
+pub mod day;
 pub mod label;
 mod brief;
 mod sun_brief;

@@ -1,11 +1,12 @@
 //! The Sun at one instant, and the day it makes at one place.
 
+use crate::day::{CivilDay, Clock};
 use crate::intake::Stop;
 use crate::light::{Light, Lookout, Sample, along};
 use crate::path::Path;
 use crate::sky::{Almanac, Sky};
 use crate::units::Instant;
-use chrono::{DateTime, NaiveDate, NaiveTime, TimeDelta, TimeZone, Utc};
+use chrono::NaiveDate;
 
 /// The Sun's almanac quantities at an instant, and a place's day about it.
 #[derive(Debug, Clone)]
@@ -52,8 +53,7 @@ pub fn sun_brief(instant: Instant, stop: Option<Stop>, sky: &Sky) -> SunBrief {
 }
 
 fn place_day(instant: Instant, stop: Stop, sky: &Sky) -> PlaceDay {
-    let (date, begin, end) = day_about(instant, &stop);
-    let seconds = end.since_s(begin);
+    let CivilDay { date, begin, seconds } = Clock::of(&stop).day_about(instant);
     let path = Path::standing(stop.place, begin, seconds);
     let light = along(&path, sky);
     let lookout = Lookout::new(&path, &light, sky);
@@ -67,33 +67,4 @@ fn place_day(instant: Instant, stop: Stop, sky: &Sky) -> PlaceDay {
         seconds,
         light,
     }
-}
-
-/// The civil date at a place that holds an instant, with its beginning and end.
-fn day_about(instant: Instant, stop: &Stop) -> (NaiveDate, Instant, Instant) {
-    if let Some(zone) = stop.zone {
-        let date = instant.utc().with_timezone(&zone).date_naive();
-        let (next, repeated) = midnights(date + TimeDelta::days(1), zone);
-        // clocks that go back across midnight bring the old date again
-        let end = if next > instant { next } else { repeated };
-        return (date, midnights(date, zone).0, end);
-    }
-    // local mean time: four minutes to the degree
-    let ahead_s = stop.place.lon.deg() * 240.0;
-    let date = instant.after_s(ahead_s).utc().date_naive();
-    let begin = Instant::from_utc(date.and_time(NaiveTime::MIN).and_utc()).after_s(-ahead_s);
-    (date, begin, begin.after_s(86_400.0))
-}
-
-/// The instants at which a date begins on a zone's clock: two where clocks go back across midnight, the same twice
-/// everywhere else. Where clocks skip midnight, or the whole date, what comes first after it.
-fn midnights(date: NaiveDate, zone: chrono_tz::Tz) -> (Instant, Instant) {
-    let instant = |local: DateTime<chrono_tz::Tz>| Instant::from_utc(local.with_timezone(&Utc));
-    let first = (0..2 * 24 * 4).find_map(|quarter| {
-        let time = date.and_time(NaiveTime::MIN) + TimeDelta::minutes(15 * quarter);
-        let local = zone.from_local_datetime(&time);
-        Some((instant(local.earliest()?), instant(local.latest()?)))
-    });
-    let utc = Instant::from_utc(date.and_time(NaiveTime::MIN).and_utc());
-    first.unwrap_or((utc, utc))
 }

@@ -9,6 +9,7 @@ mod places;
 mod sky;
 mod path;
 mod light;
+mod day;
 mod charts;
 mod reports;
 mod cli;

@@ -31,10 +31,14 @@ const ROOMS: &[(&str, &[From])] = &[
     ("path", &[Face("units"), Face("intake")]),
     ("sky", &[Face("units"), Face("curve")]),
     ("light", &[Face("units"), Face("curve"), Face("path"), Face("sky")]),
+    ("day", &[Face("units"), Face("curve"), Face("intake"), Face("path"), Face("sky"), Face("light")]),
     ("label", &[Face("units"), Face("path"), Face("light")]),
     ("brief", &[Face("units"), Face("intake"), Face("path"), Face("sky"), Face("light")]),
-    ("sun_brief", &[Face("units"), Face("intake"), Face("path"), Face("sky"), Face("light")]),
-    ("charts", &[Face("units"), Face("label"), Face("intake"), Face("path"), Face("light"), Root]),
+    ("sun_brief", &[Face("units"), Face("intake"), Face("path"), Face("sky"), Face("light"), Face("day")]),
+    (
+        "charts",
+        &[Face("units"), Face("label"), Face("intake"), Face("path"), Face("light"), Face("day"), Root],
+    ),
     (
         "reports",
         &[
@@ -44,6 +48,7 @@ const ROOMS: &[(&str, &[From])] = &[
             Face("path"),
             Only("sky", &["YearEvent", "YearMoment"]),
             Face("light"),
+            Face("day"),
             Face("charts"),
             Root,
         ],

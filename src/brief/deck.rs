@@ -1,11 +1,12 @@
 //! The flight deck's share of a brief: what it sees of the Sun, and how far that can be trusted.
 
+use crate::intake::Flight;
 use crate::light::{
-    Deck, Doubt, Limit, Lookout, REFRACTION_SCATTER, Sample, Trace, Trust, deck, doubts, elevation_scatter,
-    trust,
+    Deck, DeckHorizon, Doubt, Limit, Lookout, REFRACTION_SCATTER, Sample, Trace, Trust, deck, doubts,
+    elevation_scatter, trust,
 };
 use crate::path::Path;
-use crate::sky::{Horizon, Sky};
+use crate::sky::{GeometricElevation, Horizon, Sky};
 use crate::units::{Angle, Metres};
 
 /// What the flight deck sees, with the Sun at each crossing and how far each can be trusted.
@@ -13,6 +14,10 @@ use crate::units::{Angle, Metres};
 pub struct DeckView {
     /// Visible or not, and when.
     pub deck: Deck,
+    /// The deck's horizon along the path.
+    pub horizon: DeckHorizon,
+    /// Its limit each minute from take-off, at landing, and wherever the climb changes, in order of time.
+    pub limits: Vec<(f64, GeometricElevation)>,
     /// The Sun at each crossing, in the crossings' order.
     pub at_crossings: Vec<Sample>,
     /// How far each crossing can be trusted, in their order.
@@ -21,35 +26,40 @@ pub struct DeckView {
     pub doubts: Vec<Doubt>,
 }
 
-/// Looks from the deck, at the height flown, over the sea or a horizon of the planner's own.
+/// Looks from the deck, at the height flown, over the sea or a horizon of the planner's own; nothing without a level.
 pub(super) fn view(
+    flight: &Flight,
     trace: &Trace,
     (path, sky): (&Path, &Sky),
     lookout: &Lookout<'_>,
-    flown: Flown,
-) -> DeckView {
-    let horizon =
-        flown.horizon.and_then(|height| Horizon::raised(height).ok()).unwrap_or_else(Horizon::clear_sea);
-    let deck = deck(trace, path, sky, (&horizon, flown.height));
-    let scatter = scatter(&deck);
+) -> Option<DeckView> {
+    let heights = path.heights.clone()?;
+    let sea = flight.horizon.and_then(|height| Horizon::raised(height).ok());
+    let horizon = DeckHorizon::new(path, sky, sea.unwrap_or_else(Horizon::clear_sea), heights);
+    let (trace, elevation) = horizon.trace(trace, path, sky);
+    let deck = deck(&horizon, (&trace, elevation), path.airborne_s);
+    let (scatter, ut1_known) = (scatter(&deck), flight.dut1.is_some());
     let at_crossings: Vec<Sample> = deck.crossings.iter().map(|c| lookout.at(c.at_s)).collect();
     let trusts = deck.crossings.iter().zip(&at_crossings).map(|(crossing, sample)| {
-        trust(trace, crossing, deck.limit.0, elevation_scatter(sample, scatter, flown.ut1_known))
+        trust(&trace, crossing, elevation, elevation_scatter(sample, scatter, ut1_known))
     });
-    DeckView {
+    Some(DeckView {
         trusts: trusts.collect(),
-        doubts: doubts(trace, (Limit::Horizon, deck.limit.0), scatter),
+        doubts: doubts(&trace, (Limit::Horizon, elevation), scatter),
         at_crossings,
+        limits: limits(&horizon, path),
+        horizon,
         deck,
-    }
+    })
 }
 
-/// Heights as they were given, and whether UT1 was.
-#[derive(Debug, Clone, Copy)]
-pub(super) struct Flown {
-    pub(super) height: Metres,
-    pub(super) horizon: Option<Metres>,
-    pub(super) ut1_known: bool,
+fn limits(horizon: &DeckHorizon, path: &Path) -> Vec<(f64, GeometricElevation)> {
+    let minutes = (0..=(path.airborne_s / super::STEP_S) as u32).map(|i| f64::from(i) * super::STEP_S);
+    let bends = path.heights.iter().flat_map(crate::path::Heights::bends_s);
+    let mut times: Vec<f64> = minutes.chain(bends).chain(std::iter::once(path.airborne_s)).collect();
+    times.sort_by(f64::total_cmp);
+    times.dedup();
+    times.into_iter().map(|at_s| (at_s, horizon.limit_at(at_s))).collect()
 }
 
 /// Refraction's scatter on the ray that grazes the deck's horizon: that at sea level, grown with the bending itself.

@@ -17,7 +17,6 @@ use crate::light::{
 use crate::path::{CircleCrossing, FlightError, Passed, Path, circles, fly};
 use crate::sky::Sky;
 use crate::units::Angle;
-use deck::Flown;
 
 /// Seconds between the rows of a brief's table.
 const STEP_S: f64 = 60.0;
@@ -78,9 +77,7 @@ pub fn brief(flight: Flight, sky: &Sky) -> Result<Brief, FlightError> {
     let lookout = Lookout::new(&path, &light, sky);
     let ut1_known = flight.dut1.is_some();
     let at_crossings: Vec<Sample> = light.crossings.iter().map(|c| lookout.at(c.at_s)).collect();
-    let deck = flight.level.map(|height| {
-        deck::view(&trace, (&path, sky), &lookout, Flown { height, horizon: flight.horizon, ut1_known })
-    });
+    let deck = deck::view(&flight, &trace, (&path, sky), &lookout);
     let at_touches = light.touches.iter().map(|t| lookout.at(t.at_s)).collect();
     let at_waypoints = path.waypoints_s().iter().map(|&at_s| lookout.at(at_s)).collect();
     let (at_highest, at_lowest) = (lookout.at(light.highest.at_s), lookout.at(light.lowest.at_s));

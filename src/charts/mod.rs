@@ -1,9 +1,11 @@
-//! Pictures of a brief.
+//! Pictures of a brief, and of a place's days.
 //!
 //! Knows nothing of the sky or of files: a chart computes no angle and opens nothing.
 
 pub mod canvas;
 pub mod labels;
 mod timeline;
+mod year;
 
 pub use timeline::timeline;
+pub use year::year;

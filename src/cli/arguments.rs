@@ -17,6 +17,8 @@ pub(super) enum Command {
     Brief(Box<BriefRequest>),
     /// The Sun's almanac quantities at an instant, a place's day, or a year's equinoxes and solstices
     Sun(SunRequest),
+    /// A place's civil days: sunrise, sunset, twilights, transit, polar day and night, the Moon
+    Aerodrome(AerodromeRequest),
 }
 
 /// The form of what goes to standard output.
@@ -93,6 +95,14 @@ pub(super) struct InlineRequest {
     #[arg(long, value_name = "FEET", requires = "from", allow_hyphen_values = true)]
     pub(super) level_ft: Option<f64>,
 
+    /// Rate of climb to the cruise height in feet a minute; without it the height holds from take-off to landing
+    #[arg(long, value_name = "FT/MIN", requires = "from", allow_hyphen_values = true)]
+    pub(super) climb_ft_min: Option<f64>,
+
+    /// Rate of descent in feet a minute
+    #[arg(long, value_name = "FT/MIN", requires = "from", allow_hyphen_values = true)]
+    pub(super) descent_ft_min: Option<f64>,
+
     /// Height in feet of the cloud tops or terrain at the flight deck's horizon, if not the sea
     #[arg(long, value_name = "FEET", requires = "from", allow_hyphen_values = true)]
     pub(super) horizon_ft: Option<f64>,
@@ -119,6 +129,36 @@ pub(super) struct SunRequest {
     /// What goes to standard output: text or json
     #[arg(long = "as", value_parser = ["text", "json"], default_value = "text", value_name = "FORM")]
     pub(super) form: String,
+
+    /// UT1 − UTC in seconds
+    #[arg(long, value_name = "SECONDS", default_value_t = 0.0, allow_hyphen_values = true)]
+    pub(super) dut1_s: f64,
+}
+
+#[derive(Debug, Args)]
+#[command(
+    after_help = "Days are those of the place's own clock: its zone's, or local mean time where no zone is known."
+)]
+pub(super) struct AerodromeRequest {
+    /// Aerodrome code or coordinates: ENTC, TOS, 7830N02000W or 43.68,-79.63
+    #[arg(value_name = "CODE", allow_hyphen_values = true)]
+    pub(super) place: String,
+
+    /// The date, or the first of several
+    #[arg(long, value_name = "DATE")]
+    pub(super) on: String,
+
+    /// The last date, up to 400 days in all
+    #[arg(long, value_name = "DATE")]
+    pub(super) to: Option<String>,
+
+    /// What goes to standard output: text, json (one object) or csv (one row a date)
+    #[arg(long = "as", value_parser = ["text", "json", "csv"], default_value = "text", value_name = "FORM")]
+    pub(super) form: String,
+
+    /// Write PLACE-DATES.txt, .json, .csv, .png and .svg into this folder
+    #[arg(long, value_name = "DIR")]
+    pub(super) out: Option<PathBuf>,
 
     /// UT1 − UTC in seconds
     #[arg(long, value_name = "SECONDS", default_value_t = 0.0, allow_hyphen_values = true)]

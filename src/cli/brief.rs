@@ -108,6 +108,8 @@ fn flights(request: &BriefRequest) -> Vec<Result<(Flight, String), Refusal>> {
             landing: inline.landing.as_deref(),
             level_ft: inline.level_ft,
             horizon_ft: inline.horizon_ft,
+            climb_ft_min: inline.climb_ft_min,
+            descent_ft_min: inline.descent_ft_min,
         };
         return vec![
             inline_flight(&given).map(|flight| (flight, "the flight".to_string())).map_err(Refusal::from),

@@ -1,5 +1,6 @@
 //! Arguments, files and the terminal: everything that touches the outside.
 
+mod aerodrome;
 mod arguments;
 mod brief;
 mod files;
@@ -30,6 +31,7 @@ pub(crate) fn run() -> ExitCode {
     let outcome = match arguments.command {
         Command::Brief(request) => brief::run(&request),
         Command::Sun(request) => sun::run(&request),
+        Command::Aerodrome(request) => aerodrome::run(&request),
     };
     ExitCode::from(match outcome {
         Outcome::Done => 0,

@@ -4,6 +4,9 @@ use super::nodes::{MAX_NODES, SIZES, table};
 use super::{Bandwidth, Near, nodes_for};
 use crate::units::Four;
 
+/// The place of 16 nodes in the list of sizes.
+const SIXTEEN: usize = 2;
+
 /// One smooth piece of a function of time.
 #[derive(Debug, Clone)]
 pub struct Curve {
@@ -38,8 +41,20 @@ impl Curve {
         Some(Self::sampled(span, size, near.turn_rad_s(), f))
     }
 
+    /// The same for an `f` that has more in it than the derivation knows: on at least 16 nodes, and its turning points are
+    /// bounded by its own coefficients alone. How well so many nodes hold it is for the caller to know.
+    pub fn through_at_least_16(
+        begin_s: f64,
+        end_s: f64,
+        band: Bandwidth,
+        f: impl Fn(Four) -> Four,
+    ) -> Option<Self> {
+        let size = nodes_for(band, end_s - begin_s)?.max(SIXTEEN);
+        Some(Self::sampled((begin_s, end_s), size, f64::INFINITY, f))
+    }
+
     #[inline]
-    fn sampled((begin_s, end_s): (f64, f64), size: usize, turn_rad_s: f64, f: impl Fn(Four) -> Four) -> Self {
+    fn sampled((begin_s, end_s): (f64, f64), size: usize, rate_rad_s: f64, f: impl Fn(Four) -> Four) -> Self {
         let (mid_s, half_s) = (f64::midpoint(begin_s, end_s), (end_s - begin_s) / 2.0);
         let mut values = [0.0; MAX_NODES];
         // every size is a multiple of four
@@ -48,13 +63,22 @@ impl Curve {
         {
             *values = f(Four::splat(mid_s) + Four::splat(half_s) * Four::from(*nodes)).to_array();
         }
+        Self::from_values((mid_s, half_s), size, rate_rad_s, values)
+    }
+
+    fn from_values(
+        (mid_s, half_s): (f64, f64),
+        size: usize,
+        rate_rad_s: f64,
+        values: [f64; MAX_NODES],
+    ) -> Self {
         let n = SIZES[size];
         let table = table(size);
         let mut coefficients = [0.0; MAX_NODES];
         let mut slopes = [0.0; MAX_NODES];
         multiply(&table.to_coefficients, &values[..n], &mut coefficients);
         multiply(&table.to_slopes, &values[..n], &mut slopes);
-        Self { mid_s, half_s, size, values, slopes, coefficients, turn_rad: turn_rad_s * half_s }
+        Self { mid_s, half_s, size, values, slopes, coefficients, turn_rad: rate_rad_s * half_s }
     }
 
     /// The number of nodes.

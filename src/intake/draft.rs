@@ -1,7 +1,7 @@
 //! A flight as given, each value with where it stands, and the checks that make it a [`Flight`].
 
 use super::brightness::Brightness;
-use super::flight::{Flight, PolarLimits, RoutePoint, Stop};
+use super::flight::{ClimbRates, Flight, PolarLimits, RoutePoint, Stop};
 use super::place::Named;
 use super::problem::{IntakeError, Problem};
 use crate::places::Aerodrome;
@@ -14,6 +14,8 @@ const LONGEST_H: f64 = 36.0;
 const LEVELS_FT: RangeInclusive<f64> = 0.0..=60_000.0;
 /// The heights that cloud tops or terrain can raise a horizon to: up to the tropopause of the standard atmosphere.
 const HORIZONS_FT: RangeInclusive<f64> = 0.0..=36_000.0;
+/// The rates at which aircraft climb and descend.
+const RATES_FT_MIN: RangeInclusive<f64> = 50.0..=20_000.0;
 /// The most waypoints of one flight.
 pub(super) const MOST_WAYPOINTS: usize = 20_000;
 
@@ -57,6 +59,8 @@ pub(super) struct Draft {
     pub(super) landing: Option<Given<Instant>>,
     pub(super) level_ft: Option<Given<f64>>,
     pub(super) horizon_ft: Option<Given<f64>>,
+    pub(super) climb_ft_min: Option<Given<f64>>,
+    pub(super) descent_ft_min: Option<Given<f64>>,
     pub(super) waypoints: Vec<Given<RoutePoint>>,
     pub(super) polar_limits: Option<PolarLimits>,
     pub(super) dut1: Option<Dut1>,
@@ -83,6 +87,8 @@ impl Draft {
         let (level, horizon) = (height(self.level_ft, LEVELS_FT), height(self.horizon_ft, HORIZONS_FT));
         let level = level.map_err(|(origin, ft)| fail(&origin, Problem::Level(ft)))?;
         let horizon = horizon.map_err(|(origin, ft)| fail(&origin, Problem::Horizon(ft)))?;
+        let rates = climb_rates(level.is_some(), self.climb_ft_min, self.descent_ft_min);
+        let climb = rates.map_err(|(origin, problem)| fail(&origin, problem))?;
         check_order(&self.waypoints, takeoff, landing.value)
             .map_err(|(origin, problem)| fail(&origin, problem))?;
         let name = self.name.filter(|name| name.chars().any(|c| !c.is_whitespace() && !c.is_control()));
@@ -97,6 +103,7 @@ impl Draft {
             takeoff,
             landing: landing.value,
             level,
+            climb,
             horizon,
             waypoints: self.waypoints.into_iter().map(|w| w.value).collect(),
             polar_limits: self.polar_limits,
@@ -134,6 +141,24 @@ fn height(feet: Option<Given<f64>>, range: RangeInclusive<f64>) -> Result<Option
         Some(feet) if !range.contains(&feet.value) => Err((feet.origin, feet.value)),
         feet => Ok(feet.map(|feet| Metres::from_feet(feet.value))),
     }
+}
+
+/// Both rates, or neither: a flight that only climbs would not land.
+fn climb_rates(
+    has_level: bool,
+    climb: Option<Given<f64>>,
+    descent: Option<Given<f64>>,
+) -> Result<Option<ClimbRates>, (Origin, Problem)> {
+    let (climb, descent) = match (climb, descent) {
+        (None, None) => return Ok(None),
+        (Some(climb), Some(descent)) if has_level => (climb, descent),
+        (Some(rate), _) | (_, Some(rate)) => return Err((rate.origin, Problem::HalfAClimb)),
+    };
+    let metres = |rate: &Given<f64>| match RATES_FT_MIN.contains(&rate.value) {
+        true => Ok(Metres::from_feet(rate.value)),
+        false => Err((rate.origin.clone(), Problem::ClimbRate(rate.value))),
+    };
+    Ok(Some(ClimbRates { climb: metres(&climb)?, descent: metres(&descent)? }))
 }
 
 fn check_duration(takeoff: Instant, landing: Instant) -> Result<(), Problem> {
@@ -176,6 +201,7 @@ fn stop(named: Named) -> Stop {
         label: named.label,
         name: named.aerodrome.map(|a| a.name().to_string()),
         place: named.place,
+        height: named.aerodrome.map(Aerodrome::height),
         zone: named.aerodrome.map(Aerodrome::zone),
     }
 }

@@ -12,7 +12,7 @@ use toml::Spanned;
 use toml::de::{DeTable, DeValue};
 
 /// What a flight file may hold.
-pub(super) const FIELDS: [&str; 14] = [
+pub(super) const FIELDS: [&str; 16] = [
     "name",
     "from",
     "to",
@@ -21,6 +21,8 @@ pub(super) const FIELDS: [&str; 14] = [
     "airborne",
     "level_ft",
     "horizon_ft",
+    "climb_ft_min",
+    "descent_ft_min",
     "dut1_s",
     "waypoint",
     "polar_areas",
@@ -91,6 +93,14 @@ impl Reader<'_> {
             horizon_ft: table
                 .get("horizon_ft")
                 .map(|v| self.given(v, number("horizon_ft", v)))
+                .transpose()?,
+            climb_ft_min: table
+                .get("climb_ft_min")
+                .map(|v| self.given(v, number("climb_ft_min", v)))
+                .transpose()?,
+            descent_ft_min: table
+                .get("descent_ft_min")
+                .map(|v| self.given(v, number("descent_ft_min", v)))
                 .transpose()?,
             level_ft: table.get("level_ft").map(|v| self.given(v, number("level_ft", v))).transpose()?,
             waypoints: table.get("waypoint").map_or(Ok(Vec::new()), |v| self.waypoints(v))?,

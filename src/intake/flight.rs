@@ -19,6 +19,8 @@ pub struct Flight {
     pub landing: Instant,
     /// Cruise height above mean sea level.
     pub level: Option<Metres>,
+    /// How fast it climbs to that height and descends from it; without it the height holds from take-off to landing.
+    pub climb: Option<ClimbRates>,
     /// Height of the cloud tops or terrain that make the flight deck's horizon, if not the sea.
     pub horizon: Option<Metres>,
     /// The points between, in order.
@@ -40,8 +42,19 @@ pub struct Stop {
     pub name: Option<String>,
     /// Where it is.
     pub place: Place,
+    /// Its height above mean sea level, where it was given by code.
+    pub height: Option<Metres>,
     /// The zone its clocks keep, where known.
     pub zone: Option<Tz>,
+}
+
+/// Rates of climb and descent, each a height a minute.
+#[derive(Debug, Clone, Copy, PartialEq)]
+pub struct ClimbRates {
+    /// Upwards.
+    pub climb: Metres,
+    /// Downwards.
+    pub descent: Metres,
 }
 
 /// A point of the route.

@@ -5,7 +5,7 @@ use super::draft::{Draft, Given, Origin};
 use super::flight::Flight;
 use super::place::{Named, place};
 use super::problem::{IntakeError, Problem};
-use super::time::{duration_s, instant};
+use super::time::{date, duration_s, instant};
 use crate::places::Aerodrome;
 
 /// The texts of a flight's command-line options.
@@ -25,6 +25,10 @@ pub struct Inline<'a> {
     pub landing: Option<&'a str>,
     /// `--level-ft`
     pub level_ft: Option<f64>,
+    /// `--climb-ft-min`
+    pub climb_ft_min: Option<f64>,
+    /// `--descent-ft-min`
+    pub descent_ft_min: Option<f64>,
     /// `--horizon-ft`
     pub horizon_ft: Option<f64>,
 }
@@ -49,6 +53,12 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
         landing: given.landing.map(|text| read("--landing", text, instant)).transpose()?,
         level_ft: given.level_ft.map(|value| Given { value, origin: Origin::Option("--level-ft") }),
         horizon_ft: given.horizon_ft.map(|value| Given { value, origin: Origin::Option("--horizon-ft") }),
+        climb_ft_min: given
+            .climb_ft_min
+            .map(|value| Given { value, origin: Origin::Option("--climb-ft-min") }),
+        descent_ft_min: given
+            .descent_ft_min
+            .map(|value| Given { value, origin: Origin::Option("--descent-ft-min") }),
         waypoints: Vec::new(),
         polar_limits: None,
         dut1: None,
@@ -64,7 +74,8 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
 pub fn place_argument(argument: &'static str, text: &str) -> Result<super::Stop, IntakeError> {
     let Given { value: Named { label, place, aerodrome }, .. } = read(argument, text, place)?;
     let name = aerodrome.map(|a| a.name().to_string());
-    Ok(super::Stop { label, name, place, zone: aerodrome.map(Aerodrome::zone) })
+    let (height, zone) = (aerodrome.map(Aerodrome::height), aerodrome.map(Aerodrome::zone));
+    Ok(super::Stop { label, name, place, height, zone })
 }
 
 /// An instant given on its own.
@@ -73,6 +84,14 @@ pub fn place_argument(argument: &'static str, text: &str) -> Result<super::Stop,
 /// A time that cannot be read or lies outside the years served, with the name of the argument.
 pub fn instant_argument(argument: &'static str, text: &str) -> Result<crate::units::Instant, IntakeError> {
     read(argument, text, instant).map(|given| given.value)
+}
+
+/// A civil date given on its own.
+///
+/// # Errors
+/// A date that cannot be read or does not exist, with the name of the argument.
+pub fn date_argument(argument: &'static str, text: &str) -> Result<chrono::NaiveDate, IntakeError> {
+    read(argument, text, date).map(|given| given.value)
 }
 
 fn read<T>(

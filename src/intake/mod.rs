@@ -15,6 +15,6 @@ mod inline;
 pub use brightness::{Brightness, BrightnessError, lux_levels};
 pub use draft::Origin;
 pub use file::flight_file;
-pub use flight::{Flight, PolarLimits, RoutePoint, Stop};
-pub use inline::{Inline, inline_flight, instant_argument, place_argument};
+pub use flight::{ClimbRates, Flight, PolarLimits, RoutePoint, Stop};
+pub use inline::{Inline, date_argument, inline_flight, instant_argument, place_argument};
 pub use problem::{IntakeError, Problem};

@@ -74,6 +74,9 @@ pub enum Problem {
     /// A time that cannot be read.
     #[error("{} is no date and time", quoted(.0))]
     Instant(String),
+    /// A date that cannot be read, or that no calendar has.
+    #[error("{} is no date", quoted(.0))]
+    Date(String),
     /// A time without an offset.
     #[error("{} says no offset from UTC", quoted(.0))]
     NoOffset(String),
@@ -148,6 +151,12 @@ pub enum Problem {
     /// A level no aircraft flies at.
     #[error("a level of {0} ft is outside 0 ft to 60000 ft")]
     Level(f64),
+    /// A rate no aircraft climbs at.
+    #[error("a rate of {0} ft/min is outside 50 ft/min to 20000 ft/min")]
+    ClimbRate(f64),
+    /// One rate without the other, or without a level.
+    #[error("a rate of climb or descent stands alone")]
+    HalfAClimb,
     /// A horizon no cloud or mountain makes.
     #[error("a horizon at {0} ft is outside 0 ft to 36000 ft")]
     Horizon(f64),
@@ -177,11 +186,13 @@ impl Problem {
             Self::Instant(_) | Self::NoOffset(_) => {
                 "write 2026-12-18T05:10Z, or 2026-12-18T00:10-05:00 with an offset"
             }
+            Self::Date(_) => "write 2026-12-18",
             Self::Duration(_) => "write 14h55m, 14h or 55m",
             Self::NotText(_) => "a flight file is TOML in UTF-8: save it as UTF-8, not as UTF-16",
             Self::Empty => "a flight file needs at least from, to, takeoff, and airborne or landing",
             Self::UnknownField(field) => return near_field(field),
             Self::Landing(_) => "give one of airborne = \"14h55m\" and landing = 2026-12-18T20:05:00Z",
+            Self::HalfAClimb => "give level_ft, climb_ft_min and descent_ft_min together",
             Self::LandingConflict { .. } => "leave one of them out",
             _ => return None,
         };

@@ -2,7 +2,7 @@
 
 use super::problem::Problem;
 use crate::units::Instant;
-use chrono::{DateTime, FixedOffset, NaiveDateTime, Utc};
+use chrono::{DateTime, FixedOffset, NaiveDate, NaiveDateTime, Utc};
 
 /// Reads an instant: RFC 3339 with an offset or Z; the seconds may be left out and a space may stand for the T.
 pub(super) fn instant(text: &str) -> Result<Instant, Problem> {
@@ -35,6 +35,15 @@ fn not_an_instant(text: &str) -> Problem {
     }
 }
 
+/// Reads a civil date as ISO 8601 writes it.
+pub(super) fn date(text: &str) -> Result<NaiveDate, Problem> {
+    let text = text.trim();
+    // the parser takes signs, spaces and single digits as well
+    let is_plain = text.len() == 10 && text.bytes().all(|b| b.is_ascii_digit() || b == b'-');
+    let parsed = NaiveDate::parse_from_str(text, "%Y-%m-%d").ok().filter(|_| is_plain);
+    parsed.ok_or_else(|| Problem::Date(text.to_string()))
+}
+
 /// Reads a duration in seconds: `14h55m`, `14h`, `55m`, `14h55m30s`, or ISO 8601's `PT14H55M`.
 pub(super) fn duration_s(text: &str) -> Result<f64, Problem> {
     let bad = || Problem::Duration(text.trim().to_string());
@@ -62,7 +71,7 @@ pub(super) fn duration_s(text: &str) -> Result<f64, Problem> {
 #[cfg(test)]
 mod tests {
     use super::super::problem::Problem;
-    use super::{duration_s, instant};
+    use super::{date, duration_s, instant};
 
     #[test]
     fn one_instant_has_many_spellings() {
@@ -98,6 +107,23 @@ mod tests {
         }
         for text in ["", "PT", "14", "14:55", "55m14h", "-2h", "1.5h", "999999999h", "h"] {
             assert!(duration_s(text).is_err(), "{text}");
+        }
+    }
+
+    #[test]
+    fn a_date_is_ten_characters_and_exists() {
+        assert_eq!(date(" 2028-02-29 ").unwrap().to_string(), "2028-02-29");
+        for text in [
+            "",
+            "2026-2-1",
+            "2026-02-29",
+            "+026-02-01",
+            "2026-13-01",
+            "20260201",
+            "2026-02-1\u{661}",
+            "today",
+        ] {
+            assert!(matches!(date(text), Err(Problem::Date(_))), "{text}");
         }
     }
 }

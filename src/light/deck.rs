@@ -3,22 +3,23 @@
 use super::limit::{Direction, Limit};
 use super::meet::{Crossing, Level, Touch, meetings};
 use super::trace::Trace;
-use crate::path::Path;
+use crate::path::{Heights, Path};
 use crate::sky::{GeometricElevation, Horizon, Sky};
 use crate::units::{Angle, Metres};
+use std::borrow::Cow;
 
 /// What the flight deck sees of the Sun.
 #[derive(Debug, Clone)]
 pub struct Deck {
-    /// Height above mean sea level.
+    /// The greatest height flown, above mean sea level.
     pub height: Metres,
     /// Height of what stands at the horizon: 0 for the sea.
     pub horizon: Metres,
-    /// Geometric elevation of the Sun's centre when its upper limb is on that horizon.
+    /// Geometric elevation of the Sun's centre when its upper limb is on that horizon, from the greatest height.
     pub limit: GeometricElevation,
-    /// How far below level the horizon appears.
+    /// How far below level the horizon appears, from the greatest height.
     pub dip: Angle,
-    /// How far the grazing ray is bent, down through the dense air and out again.
+    /// How far the grazing ray is bent, down through the dense air and out again to the greatest height.
     pub refraction: Angle,
     /// Deck sunrises and deck sunsets, in order of time.
     pub crossings: Vec<Crossing>,
@@ -39,25 +40,68 @@ pub struct DeckSegment {
     pub end_s: f64,
 }
 
-/// Finds when the flight deck sees the Sun, from the height flown over a horizon.
+/// The horizon of a flight deck along its path: the limit that the Sun meets, at the height flown at that moment.
+#[derive(Debug, Clone)]
+pub struct DeckHorizon {
+    horizon: Horizon,
+    heights: Heights,
+    semidiameter: Angle,
+}
+
+impl DeckHorizon {
+    /// The horizon seen from a path's heights. The semidiameter is that of the path's middle: in a flight it changes by
+    /// less than 0.02″.
+    pub fn new(path: &Path, sky: &Sky, horizon: Horizon, heights: Heights) -> Self {
+        Self { horizon, heights, semidiameter: sky.sun_at(path.middle()).semidiameter() }
+    }
+
+    /// The Sun's limit at a time in seconds from take-off.
+    pub fn limit_at(&self, at_s: f64) -> GeometricElevation {
+        self.horizon.sun_centre_limit(self.heights.at(at_s), self.semidiameter)
+    }
+
+    /// Times between which the limit is smooth enough for 16 nodes: where the climb changes, and where the height above
+    /// the horizon has quadrupled ([`Horizon`] says why). The first half metre, in which the limit falls like a root, is a
+    /// stretch of its own: it lasts less than the 0.05 s that a time may err by.
+    fn cuts(&self) -> Vec<f64> {
+        const FIRST_M: f64 = 0.5;
+        let above = |step: i32| Metres(self.horizon.height().0 + FIRST_M * 4_f64.powi(step));
+        let passed = (0..9).flat_map(|step| self.heights.passes_s(above(step)));
+        let level = self.heights.passes_s(self.horizon.height());
+        let mut cuts: Vec<f64> = passed.chain(level).chain(self.heights.bends_s()).collect();
+        cuts.sort_by(f64::total_cmp);
+        cuts.dedup_by(|a, b| *a - *b < 1e-6);
+        cuts
+    }
+
+    /// The Sun's sine against this horizon, and the elevation that its zero stands for: the trace beneath where one height
+    /// holds, a trace of its own where the limit moves.
+    pub fn trace<'t>(&self, beneath: &'t Trace, path: &Path, sky: &Sky) -> (Cow<'t, Trace>, Angle) {
+        if self.heights.is_level() {
+            return (Cow::Borrowed(beneath), self.limit_at(0.0).0);
+        }
+        let moving = Trace::against(path, sky, &self.cuts(), |at_s| self.limit_at(at_s).0);
+        (Cow::Owned(moving), Angle::ZERO)
+    }
+}
+
+/// Finds when the flight deck sees the Sun: `trace` and `elevation` are what [`DeckHorizon::trace`] gives.
 ///
 /// # Accuracy
-/// That of the crossings beneath, with the limit of the standard atmosphere at that height ([`Horizon`]). The
-/// semidiameter is that of the flight's middle: in a flight it changes by less than 0.02″.
-pub fn deck(trace: &Trace, path: &Path, sky: &Sky, (horizon, height): (&Horizon, Metres)) -> Deck {
-    let semidiameter = sky.sun_at(path.middle()).semidiameter();
-    let limit = horizon.sun_centre_limit(height, semidiameter);
-    let level = Level { limit: Limit::Horizon, elevation: limit.0 };
+/// That of the crossings beneath, with the limit of the standard atmosphere at the height flown ([`Horizon`]).
+pub fn deck(seen: &DeckHorizon, (trace, elevation): (&Trace, Angle), airborne_s: f64) -> Deck {
+    let level = Level { limit: Limit::Horizon, elevation };
     let (mut crossings, mut touches) = (Vec::new(), Vec::new());
     meetings(trace, level, &mut crossings, &mut touches);
     let begins_visible = trace.peaks()[0].sine >= level.sine();
+    let height = seen.heights.highest();
     Deck {
         height,
-        horizon: horizon.height(),
-        limit,
-        dip: horizon.dip(height),
-        refraction: horizon.refraction(height),
-        segments: segments(begins_visible, &crossings, path.airborne_s),
+        horizon: seen.horizon.height(),
+        limit: seen.horizon.sun_centre_limit(height, seen.semidiameter),
+        dip: seen.horizon.dip(height),
+        refraction: seen.horizon.refraction(height),
+        segments: segments(begins_visible, &crossings, airborne_s),
         crossings,
         touches,
     }

@@ -19,7 +19,7 @@ mod moon;
 mod exposure;
 
 pub use along::{Light, along, beneath};
-pub use deck::{Deck, DeckSegment, deck};
+pub use deck::{Deck, DeckHorizon, DeckSegment, deck};
 pub use exposure::{Above, Exposure, LightMeter, LuxAt, USUAL_LEVELS, exposure};
 pub use limit::{Direction, Event, Limit, State};
 pub use meet::{Crossing, TOUCH, Touch};

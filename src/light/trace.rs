@@ -3,7 +3,7 @@
 use crate::curve::{Bandwidth, Curve, Near};
 use crate::path::{Leg, Path};
 use crate::sky::{MEAN_SUN_RAD_S, Sky, sine_of_elevation};
-use crate::units::wgs84;
+use crate::units::{Angle, Four, wgs84};
 
 /// The Sun's true rate about the axis exceeds the mean one by less than this factor: the equation of time changes by
 /// less than 30 s a day and the declination by less than 0.4° a day, which is 0.0012 of a turn together.
@@ -32,6 +32,30 @@ pub struct Peak {
 }
 
 impl Trace {
+    /// The sine of the Sun's elevation less that of a limit which changes on the way; the limit is smooth between `cuts`,
+    /// given in seconds from take-off in rising order, and 16 nodes hold it there.
+    pub(super) fn against(path: &Path, sky: &Sky, cuts: &[f64], limit: impl Fn(f64) -> Angle) -> Self {
+        let window = sky.window(path.takeoff, path.landing());
+        let through = |leg: &Leg, (begin_s, end_s): (f64, f64)| {
+            let band = band(leg, TRUE_SUN * MEAN_SUN_RAD_S);
+            Curve::through_at_least_16(begin_s, end_s, band, |t| {
+                let limits = Four::from(t.to_array().map(|t| limit(t).rad().sin()));
+                sine_of_elevation(leg.normal(t), &window.at(t)) - limits
+            })
+        };
+        let mut curves = Vec::with_capacity(path.legs().len() + cuts.len());
+        for leg in path.legs() {
+            let inner = cuts.iter().copied().filter(|&cut| leg.begin_s < cut && cut < leg.end_s);
+            let mut begin_s = leg.begin_s;
+            for end_s in inner.chain(std::iter::once(leg.end_s)) {
+                fit(leg, &through, (begin_s, end_s), &mut curves);
+                begin_s = end_s;
+            }
+        }
+        let peaks = peaks(&curves, path);
+        Self { curves, peaks }
+    }
+
     /// The Sun's elevation beneath the aircraft.
     pub fn beneath(path: &Path, sky: &Sky) -> Self {
         let window = sky.window(path.takeoff, path.landing());

@@ -1,6 +1,7 @@
 //! From a flight to its path: each leg gets its geodesic, and each point its time.
 
 use super::geodesic::Line;
+use super::height::{Climb, Heights};
 use super::leg::Leg;
 use crate::intake::Flight;
 use crate::units::{Angle, Instant, Metres, Place, Vector};
@@ -48,8 +49,8 @@ pub struct Path {
     pub takeoff: Instant,
     /// Seconds from take-off to landing.
     pub airborne_s: f64,
-    /// Height above mean sea level, where the flight file gives a level.
-    pub height: Option<Metres>,
+    /// Height above mean sea level over time, where the flight gives a level.
+    pub heights: Option<Heights>,
     legs: Vec<Leg>,
     waypoints_s: Vec<f64>,
 }
@@ -96,7 +97,27 @@ pub fn fly(flight: &Flight) -> Result<Path, FlightError> {
     if legs.iter().all(|leg| leg.length_m() == 0.0) {
         return Err(FlightError::NoLength { from: flight.from.label.clone(), to: flight.to.label.clone() });
     }
-    Ok(Path { takeoff: flight.takeoff, airborne_s, height: flight.level, legs, waypoints_s: passed_s })
+    Ok(Path {
+        takeoff: flight.takeoff,
+        airborne_s,
+        heights: heights(flight, airborne_s),
+        legs,
+        waypoints_s: passed_s,
+    })
+}
+
+/// The level from take-off to landing, or up to it and down from it where rates of climb and descent are given.
+fn heights(flight: &Flight, airborne_s: f64) -> Option<Heights> {
+    let level = flight.level?;
+    let Some(rates) = flight.climb else { return Some(Heights::level(level, airborne_s)) };
+    let field = |stop: &crate::intake::Stop| stop.height.map_or(0.0, |height| height.0.min(level.0));
+    let climb = Climb {
+        from_m: field(&flight.from),
+        level_m: level.0,
+        to_m: field(&flight.to),
+        rates_m_s: (rates.climb.0 / 60.0, rates.descent.0 / 60.0),
+    };
+    Some(Heights::climbing(climb, airborne_s))
 }
 
 fn fixes(flight: &Flight, airborne_s: f64) -> Vec<Fix<'_>> {
@@ -187,7 +208,7 @@ impl Path {
             place: Place::from_normal(point.normal),
             normal: point.normal,
             track: point.track,
-            height: self.height,
+            height: self.heights.as_ref().map(|heights| heights.at(seconds)),
         }
     }
 }
@@ -196,6 +217,6 @@ impl Path {
     /// An observer who stays at a place: what a day at an aerodrome is computed from.
     pub fn standing(place: Place, begin: Instant, seconds: f64) -> Self {
         let leg = Leg::new(place, place, Line::between(place, place), (0.0, seconds));
-        Self { takeoff: begin, airborne_s: seconds, height: None, legs: vec![leg], waypoints_s: Vec::new() }
+        Self { takeoff: begin, airborne_s: seconds, heights: None, legs: vec![leg], waypoints_s: Vec::new() }
     }
 }

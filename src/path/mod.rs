@@ -4,6 +4,7 @@
 
 mod geodesic;
 mod leg;
+mod height;
 mod fly;
 mod circle;
 mod extent;
@@ -12,4 +13,5 @@ pub use circle::{Circle, CircleCrossing, CircleName, Heading, circles};
 pub use extent::Passed;
 pub use fly::{FlightError, Path, Position, fly};
 pub use geodesic::{Line, LinePoint};
+pub use height::Heights;
 pub use leg::Leg;

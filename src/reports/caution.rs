@@ -42,3 +42,19 @@ pub(super) fn general() -> Vec<String> {
     .map(str::to_string)
     .to_vec()
 }
+
+/// The cautions of a place's days.
+pub(super) fn at_place(dut1_s: f64) -> Vec<String> {
+    let [judges, ..] = &general()[..] else { return Vec::new() };
+    let ut1 = if dut1_s == 0.0 {
+        "UT1 − UTC is taken as 0 s; it may be up to 0.9 s either way, which moves all times by as much."
+            .to_string()
+    } else {
+        ut1(dut1_s)
+    };
+    let horizon = "Times are for a clear sea-level horizon at the place with the almanacs' refraction (Sun's centre 50′ \
+                   below it at sunrise and sunset, Moon's upper limb 34′); height, terrain, cloud and weather move them, and \
+                   refraction alone scatters them by a minute or more, at high latitudes by many minutes, or by days where \
+                   a polar day or night begins or ends.";
+    vec![judges.clone(), horizon.to_string(), ut1]
+}

@@ -74,7 +74,7 @@ fn moonlight(moon: &MoonSample, lux: f64) -> [String; 4] {
 }
 
 /// A number with so many decimals and no negative zero.
-fn fixed(value: f64, decimals: usize) -> String {
+pub(super) fn fixed(value: f64, decimals: usize) -> String {
     let text = format!("{value:.decimals$}");
     if text.starts_with('-') && text.bytes().all(|b| matches!(b, b'-' | b'0' | b'.')) {
         text[1..].to_string()
@@ -84,7 +84,7 @@ fn fixed(value: f64, decimals: usize) -> String {
 }
 
 /// A text that no spreadsheet takes for a formula: an apostrophe goes before the characters that begin one.
-fn no_formula(text: &str) -> String {
+pub(super) fn no_formula(text: &str) -> String {
     if text.starts_with(['=', '+', '-', '@']) { format!("'{text}") } else { text.to_string() }
 }
 

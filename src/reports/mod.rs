@@ -9,10 +9,12 @@ mod text;
 mod table;
 mod caution;
 mod sun;
+mod days;
 mod name;
 
 pub use crate::label::one_line;
 pub use csv::csv;
+pub use days::{days_csv, days_json, days_stem, days_text};
 pub use json::{json, json_list};
 pub use name::file_stem;
 pub use sun::{SunReport, sun_json, sun_text, year_json, year_text};

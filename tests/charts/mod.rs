@@ -2,3 +2,4 @@
 
 mod canvas;
 mod timeline;
+mod year;

@@ -1,5 +1,6 @@
 //! The built program, run as its users run it.
 
+mod aerodrome;
 mod batch;
 mod brightness;
 mod forms;

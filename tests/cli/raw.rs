@@ -69,6 +69,8 @@ proptest! {
         let inline = Inline {
             name: Some(&a), from: &b, to: &c, takeoff: &d, airborne: Some(&a), landing: Some(&b), level_ft: Some(level),
             horizon_ft: Some(level),
+            climb_ft_min: Some(level),
+            descent_ft_min: Some(level),
         };
         if let Err(error) = inline_flight(&inline) {
             prop_assert!(!error.to_string().contains(char::is_control), "{error}");

@@ -14,7 +14,7 @@ use gloamline::units::Place;
 
 /// A flight through timed points, from take-off to landing.
 pub(crate) fn flight(name: &str, takeoff: gloamline::units::Instant, points: &[(Place, f64)]) -> Flight {
-    let stop = |place| Stop { label: name.to_string(), name: None, place, zone: None };
+    let stop = |place| Stop { label: name.to_string(), name: None, place, height: None, zone: None };
     let (first, last) = (points[0], points[points.len() - 1]);
     let waypoints = points[1..points.len() - 1].iter().map(|&(place, s)| RoutePoint {
         label: String::new(),
@@ -28,6 +28,7 @@ pub(crate) fn flight(name: &str, takeoff: gloamline::units::Instant, points: &[(
         takeoff,
         landing: takeoff.after_s(last.1),
         level: None,
+        climb: None,
         horizon: None,
         waypoints: waypoints.collect(),
         polar_limits: None,

@@ -33,6 +33,8 @@ const REACHES: [f64; 16] =
 /// How often every label is set anew, knowing the others.
 const ROUNDS: usize = 3;
 
+/// Where a label is lost from its point: from here on, twice as far is more than twice as bad.
+const FAR: f64 = 180.0;
 /// What is wrong with a place, as if it were so many pixels farther away.
 const ON_CURVE: f64 = 220.0;
 const ON_POINT: f64 = 400.0;
@@ -104,7 +106,7 @@ fn best(index: usize, wanted: &[Wanted], set: &[Option<Rect>], ground: &Ground<'
             if !free {
                 continue;
             }
-            let cost = reach + lean + faults(rect, own.anchor, &others, ground.curve);
+            let cost = reach + reach * reach / FAR + lean + faults(rect, own.anchor, &others, ground.curve);
             if best.is_none_or(|(least, _)| cost < least) {
                 best = Some((cost, rect));
             }

@@ -3,7 +3,7 @@
 //!
 //! Computes no angle: every number is found in the [`Brief`]. Knows nothing of files.
 
-mod style;
+pub(super) mod style;
 mod frame;
 mod layout;
 mod heading;
@@ -56,7 +56,7 @@ pub fn timeline(brief: &Brief) -> Result<Canvas, CanvasError> {
     bands::draw(&mut canvas, &frame);
     clocks::draw_grid(&mut canvas, &clocks, &frame);
     gates.draw(&mut canvas, &frame);
-    bands::draw_edges(&mut canvas, &frame, deck::limit(brief).map(|line| line[1].deg));
+    bands::draw_edges(&mut canvas, &frame, deck::lowest_deg(brief));
     deck::draw(&mut canvas, brief, &frame);
     curve::draw(&mut canvas, &curve, &frame);
     captions.draw(&mut canvas, &events, &frame);

@@ -7,20 +7,20 @@ use crate::charts::canvas::{Canvas, Hatch, Ink, Look, Point, Rect, TextStyle, Te
 use crate::label::one_line;
 use crate::light::State;
 
-pub(super) const INK: Ink = Ink::hex(0x18202c);
-pub(super) const MUTED: Ink = Ink::hex(0x4b5462);
-pub(super) const RULE: Ink = Ink::hex(0x7d8694);
-pub(super) const CURVE: Ink = Ink::hex(0x10161f);
-pub(super) const CIRCLE: Ink = Ink::hex(0x7a1f3d);
+pub(in crate::charts) const INK: Ink = Ink::hex(0x18202c);
+pub(in crate::charts) const MUTED: Ink = Ink::hex(0x4b5462);
+pub(in crate::charts) const RULE: Ink = Ink::hex(0x7d8694);
+pub(in crate::charts) const CURVE: Ink = Ink::hex(0x10161f);
+pub(in crate::charts) const CIRCLE: Ink = Ink::hex(0x7a1f3d);
 pub(super) const DECK: Ink = Ink::hex(0x0b5a52);
-pub(super) const PLATE: Ink = Ink::WHITE.with_alpha(0.88);
+pub(in crate::charts) const PLATE: Ink = Ink::WHITE.with_alpha(0.88);
 
 /// The smallest letters of the picture.
-pub(super) const SMALL: f64 = 14.0;
-pub(super) const TEXT: f64 = 15.0;
+pub(in crate::charts) const SMALL: f64 = 14.0;
+pub(in crate::charts) const TEXT: f64 = 15.0;
 
 /// How a state's band and its part of the strip are filled.
-pub(super) fn look(state: State) -> Look {
+pub(in crate::charts) fn look(state: State) -> Look {
     let (fill, texture) = match state {
         State::Daylight => (0xfff8e1, None),
         State::CivilTwilight => (0xf5dcb8, Some((Texture::Dots, 0xd3ae7c, 14.0))),
@@ -35,12 +35,12 @@ pub(super) fn look(state: State) -> Look {
 }
 
 /// A text of a size in the main ink.
-pub(super) const fn letters(size: f64) -> TextStyle {
+pub(in crate::charts) const fn letters(size: f64) -> TextStyle {
     TextStyle::new(size, INK)
 }
 
 /// The text as one clean line that is no wider than `width`: cut with an ellipsis where it is.
-pub(super) fn fitted(text: &str, style: &TextStyle, width: f64) -> String {
+pub(in crate::charts) fn fitted(text: &str, style: &TextStyle, width: f64) -> String {
     let line = one_line(text);
     if measure(&line, style).width <= width {
         return line;
@@ -55,12 +55,12 @@ pub(super) fn fitted(text: &str, style: &TextStyle, width: f64) -> String {
 }
 
 /// A light ground for letters.
-pub(super) fn plate(canvas: &mut Canvas, rect: Rect) {
+pub(in crate::charts) fn plate(canvas: &mut Canvas, rect: Rect) {
     canvas.rect(rect, Look::filled(PLATE));
 }
 
 /// Sets the text and says where it ends.
-pub(super) fn set(canvas: &mut Canvas, text: &str, at: Point, style: &TextStyle) -> f64 {
+pub(in crate::charts) fn set(canvas: &mut Canvas, text: &str, at: Point, style: &TextStyle) -> f64 {
     canvas.text(text, at, style);
     at.x + measure(text, style).width
 }

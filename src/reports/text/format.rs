@@ -17,7 +17,7 @@ pub(super) fn bearing(deg: f64) -> String {
 }
 
 /// Degrees with a real minus sign, and a plus where positive.
-pub(super) fn signed(deg: f64, decimals: usize) -> String {
+pub(in crate::reports) fn signed(deg: f64, decimals: usize) -> String {
     let text = format!("{:.decimals$}", deg.abs());
     let zero = text.bytes().all(|b| b == b'0' || b == b'.');
     match deg {
@@ -28,7 +28,7 @@ pub(super) fn signed(deg: f64, decimals: usize) -> String {
 }
 
 /// Degrees and minutes with hemisphere letters behind.
-pub(super) fn place(place: Place) -> String {
+pub(in crate::reports) fn place(place: Place) -> String {
     let part = |deg: f64, width: usize, letters: [char; 2]| {
         let minutes = (deg.abs() * 60.0).round() as i64;
         let letter = letters[usize::from(deg < 0.0)];

@@ -1,6 +1,6 @@
 //! A brief that a crew reads in half a minute.
 
-mod format;
+pub(super) mod format;
 mod head;
 mod beneath;
 mod aloft;
