@@ -10,6 +10,7 @@ mod sky;
 mod path;
 mod light;
 mod day;
+mod brief;
 mod charts;
 mod reports;
 mod cli;

@@ -1,17 +1,22 @@
 //! Everything that is said of one flight: the value that every report renders.
 
+mod ahead;
+mod alternates;
 mod boundary;
 mod deck;
 mod exposure;
 mod moon;
+mod runways;
 
+pub use alternates::{AlternateView, Polar};
 pub use deck::DeckView;
 pub use exposure::{ExposureView, Inside};
 pub use moon::MoonView;
+pub use runways::{Glare, RunwaySun, RunwayView};
 
-use crate::intake::{Flight, PolarLimits};
+use crate::intake::{Flight, LowSunLimits, PolarLimits};
 use crate::light::{
-    Doubt, Light, Limit, Lookout, REFRACTION_SCATTER, Sample, Trace, Trust, beneath, doubts,
+    AheadSpan, Doubt, Light, Limit, Lookout, REFRACTION_SCATTER, Sample, Trace, Trust, beneath, doubts,
     elevation_scatter, trust,
 };
 use crate::path::{CircleCrossing, FlightError, Passed, Path, circles, fly};
@@ -62,6 +67,14 @@ pub struct Brief {
     pub northernmost: Passed,
     /// The southernmost point.
     pub southernmost: Passed,
+    /// When a low Sun stands ahead.
+    pub low_sun: Vec<AheadSpan>,
+    /// What was taken for a low Sun ahead, in flight and along runways.
+    pub low_sun_limits: LowSunLimits,
+    /// The Sun against the runways at take-off and at landing.
+    pub runways: [RunwayView; 2],
+    /// The alternates in the flight's order.
+    pub alternates: Vec<AlternateView>,
     /// UT1 − UTC as it was taken, in seconds.
     pub dut1_s: f64,
 }
@@ -85,7 +98,16 @@ pub fn brief(flight: Flight, sky: &Sky) -> Result<Brief, FlightError> {
     let moon = moon::view((&path, sky), &light, &minutes);
     let exposure = exposure::view((&path, sky), (&trace, &moon.moon), &minutes, &flight.brightness);
     let polar_limits = flight.polar_limits.unwrap_or_default();
+    let low_sun_limits = flight.low_sun.unwrap_or_default();
+    let ends = (&minutes[0], &minutes[minutes.len() - 1]);
     Ok(Brief {
+        low_sun: ahead::spans(&trace, (&path, sky), (&light, deck.as_ref()), low_sun_limits),
+        runways: [
+            runways::view(&flight.from, ends.0, flight.from_air, low_sun_limits),
+            runways::view(&flight.to, ends.1, flight.to_air, low_sun_limits),
+        ],
+        alternates: flight.alternates.iter().map(|one| alternates::view(one, &path, sky)).collect(),
+        low_sun_limits,
         circles: circles(&path, sky.true_obliquity(path.middle()), polar_limits),
         northernmost: path.northernmost(),
         southernmost: path.southernmost(),

@@ -1,10 +1,10 @@
 //! A flight as given, each value with where it stands, and the checks that make it a [`Flight`].
 
+use super::ahead::{Alternate, LowSunLimits, StationAir};
 use super::brightness::Brightness;
 use super::flight::{ClimbRates, Flight, PolarLimits, RoutePoint, Stop};
 use super::place::Named;
 use super::problem::{IntakeError, Problem};
-use crate::places::Aerodrome;
 use crate::units::{Dut1, Instant, Metres};
 use std::ops::RangeInclusive;
 
@@ -65,6 +65,10 @@ pub(super) struct Draft {
     pub(super) polar_limits: Option<PolarLimits>,
     pub(super) dut1: Option<Dut1>,
     pub(super) brightness: Brightness,
+    pub(super) low_sun: Option<LowSunLimits>,
+    pub(super) from_air: Option<StationAir>,
+    pub(super) to_air: Option<StationAir>,
+    pub(super) alternates: Vec<Given<Alternate>>,
 }
 
 /// RFC 3339 in UTC to the second, for messages.
@@ -91,8 +95,10 @@ impl Draft {
         let climb = rates.map_err(|(origin, problem)| fail(&origin, problem))?;
         check_order(&self.waypoints, takeoff, landing.value)
             .map_err(|(origin, problem)| fail(&origin, problem))?;
+        check_alternates(&self.alternates, landing.value)
+            .map_err(|(origin, problem)| fail(&origin, problem))?;
         let name = self.name.filter(|name| name.chars().any(|c| !c.is_whitespace() && !c.is_control()));
-        let (from, to) = (stop(self.from), stop(self.to));
+        let (from, to) = (Stop::from(self.from), Stop::from(self.to));
         let name = name.unwrap_or_else(|| {
             format!("{}-{} {}", from.label, to.label, takeoff.utc().format("%Y-%m-%d %H%MZ"))
         });
@@ -109,6 +115,10 @@ impl Draft {
             polar_limits: self.polar_limits,
             dut1: self.dut1,
             brightness: self.brightness,
+            low_sun: self.low_sun,
+            from_air: self.from_air,
+            to_air: self.to_air,
+            alternates: self.alternates.into_iter().map(|a| a.value).collect(),
         })
     }
 
@@ -172,6 +182,17 @@ fn check_duration(takeoff: Instant, landing: Instant) -> Result<(), Problem> {
     if landing.is_answered_for() { Ok(()) } else { Err(Problem::Years { given: said(landing) }) }
 }
 
+/// No alternate is used after the years served.
+fn check_alternates(alternates: &[Given<Alternate>], landing: Instant) -> Result<(), (Origin, Problem)> {
+    for alternate in alternates {
+        let latest = landing.after_s(alternate.value.after_s);
+        if !latest.is_answered_for() {
+            return Err((alternate.origin.clone(), Problem::Years { given: said(latest) }));
+        }
+    }
+    Ok(())
+}
+
 /// Waypoint times rise strictly from take-off to landing.
 fn check_order(
     waypoints: &[Given<RoutePoint>],
@@ -194,14 +215,4 @@ fn check_order(
         last = time;
     }
     Ok(())
-}
-
-fn stop(named: Named) -> Stop {
-    Stop {
-        label: named.label,
-        name: named.aerodrome.map(|a| a.name().to_string()),
-        place: named.place,
-        height: named.aerodrome.map(Aerodrome::height),
-        zone: named.aerodrome.map(Aerodrome::zone),
-    }
 }

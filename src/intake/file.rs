@@ -1,5 +1,6 @@
 //! Flight files: TOML, read value by value so that each error names its line and column.
 
+use super::ahead::{Alternate, air, alternates, low_sun};
 use super::brightness::{Brightness, lux_levels, share};
 use super::draft::{Draft, Given, MOST_WAYPOINTS, Origin};
 use super::flight::{Flight, PolarLimits, RoutePoint};
@@ -12,7 +13,7 @@ use toml::Spanned;
 use toml::de::{DeTable, DeValue};
 
 /// What a flight file may hold.
-pub(super) const FIELDS: [&str; 16] = [
+pub(super) const FIELDS: [&str; 20] = [
     "name",
     "from",
     "to",
@@ -29,6 +30,10 @@ pub(super) const FIELDS: [&str; 16] = [
     "lux_levels",
     "transmittance",
     "view_factor",
+    "low_sun",
+    "from_air",
+    "to_air",
+    "alternate",
 ];
 /// What a waypoint may hold.
 pub(super) const WAYPOINT_FIELDS: [&str; 2] = ["at", "time"];
@@ -38,8 +43,8 @@ pub(super) const PLACE_FIELDS: [&str; 2] = ["lat", "lon"];
 pub(super) const POLAR_FIELDS: [&str; 2] = ["north_deg", "south_deg"];
 
 /// A value of the file or what is wrong with it, with the bytes it stands on.
-type Found<T> = Result<T, (Range<usize>, Problem)>;
-type Value<'a> = Spanned<DeValue<'a>>;
+pub(super) type Found<T> = Result<T, (Range<usize>, Problem)>;
+pub(super) type Value<'a> = Spanned<DeValue<'a>>;
 
 /// Reads a flight file's text.
 ///
@@ -107,6 +112,10 @@ impl Reader<'_> {
             polar_limits: table.get("polar_areas").map(polar_limits).transpose()?,
             dut1: table.get("dut1_s").map(dut1).transpose()?,
             brightness: brightness(table)?,
+            low_sun: table.get("low_sun").map(low_sun).transpose()?,
+            from_air: table.get("from_air").map(|v| air("from_air", v)).transpose()?,
+            to_air: table.get("to_air").map(|v| air("to_air", v)).transpose()?,
+            alternates: table.get("alternate").map_or(Ok(Vec::new()), |v| self.alternates(v))?,
         })
     }
 
@@ -127,6 +136,14 @@ impl Reader<'_> {
     fn duration(&self, value: &Value<'_>) -> Found<Given<f64>> {
         let text = string("airborne", value)?;
         self.given(value, duration_s(text).map_err(|problem| (value.span(), problem)))
+    }
+
+    fn alternates(&self, value: &Value<'_>) -> Found<Vec<Given<Alternate>>> {
+        let given = |(value, span): (Alternate, Range<usize>)| Given {
+            value,
+            origin: line_and_column(self.text, span.start),
+        };
+        Ok(alternates(value)?.into_iter().map(given).collect())
     }
 
     fn waypoints(&self, value: &Value<'_>) -> Found<Vec<Given<RoutePoint>>> {
@@ -178,7 +195,7 @@ impl LineCounter<'_> {
     }
 }
 
-fn wrong(
+pub(super) fn wrong(
     field: &'static str,
     found: &DeValue<'_>,
     wanted: &'static str,
@@ -188,22 +205,22 @@ fn wrong(
 }
 
 /// Refuses fields that are not known, so that a misspelt one is not passed over in silence.
-fn only(table: &DeTable<'_>, known: &[&str]) -> Found<()> {
+pub(super) fn only(table: &DeTable<'_>, known: &[&str]) -> Found<()> {
     match table.keys().find(|key| !known.contains(&key.get_ref().as_ref())) {
         Some(key) => Err((key.span(), Problem::UnknownField(key.get_ref().to_string()))),
         None => Ok(()),
     }
 }
 
-fn string<'a>(field: &'static str, value: &'a Value<'_>) -> Found<&'a str> {
+pub(super) fn string<'a>(field: &'static str, value: &'a Value<'_>) -> Found<&'a str> {
     value.get_ref().as_str().ok_or_else(|| wrong(field, value.get_ref(), "a string", value.span()))
 }
 
-fn table<'a, 'i>(field: &'static str, value: &'a Value<'i>) -> Found<&'a DeTable<'i>> {
+pub(super) fn table<'a, 'i>(field: &'static str, value: &'a Value<'i>) -> Found<&'a DeTable<'i>> {
     value.get_ref().as_table().ok_or_else(|| wrong(field, value.get_ref(), "a table", value.span()))
 }
 
-fn number(field: &'static str, value: &Value<'_>) -> Found<f64> {
+pub(super) fn number(field: &'static str, value: &Value<'_>) -> Found<f64> {
     let text = match value.get_ref() {
         DeValue::Float(float) => float.as_str().to_string(),
         DeValue::Integer(integer) if integer.radix() == 10 => integer.as_str().to_string(),
@@ -214,7 +231,7 @@ fn number(field: &'static str, value: &Value<'_>) -> Found<f64> {
 }
 
 /// A place as a string or as `{ lat, lon }`.
-fn named(field: &'static str, value: &Value<'_>) -> Found<Named> {
+pub(super) fn named(field: &'static str, value: &Value<'_>) -> Found<Named> {
     match value.get_ref() {
         DeValue::String(text) => place(text).map_err(|problem| (value.span(), problem)),
         DeValue::Table(table) => {

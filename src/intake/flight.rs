@@ -1,6 +1,9 @@
 //! A flight as its planner holds it: two ends, two times, perhaps points between.
 
+use super::ahead::{Alternate, LowSunLimits, StationAir};
 use super::brightness::Brightness;
+use super::place::Named;
+use crate::places::Aerodrome;
 use crate::units::{Dut1, Instant, Latitude, Metres, Place, PlaceError};
 use chrono_tz::Tz;
 
@@ -31,6 +34,14 @@ pub struct Flight {
     pub dut1: Option<Dut1>,
     /// What the planner asks about the brightness outside.
     pub brightness: Brightness,
+    /// What counts as a low Sun ahead, if not what usually does.
+    pub low_sun: Option<LowSunLimits>,
+    /// The air at take-off, where known.
+    pub from_air: Option<StationAir>,
+    /// The air at landing, where known.
+    pub to_air: Option<StationAir>,
+    /// Where it may divert to, in the order given.
+    pub alternates: Vec<Alternate>,
 }
 
 /// One end of a flight.
@@ -42,10 +53,25 @@ pub struct Stop {
     pub name: Option<String>,
     /// Where it is.
     pub place: Place,
-    /// Its height above mean sea level, where it was given by code.
-    pub height: Option<Metres>,
     /// The zone its clocks keep, where known.
     pub zone: Option<Tz>,
+    /// The aerodrome, where it was given by code.
+    pub aerodrome: Option<Aerodrome>,
+}
+
+impl Stop {
+    /// Its height above mean sea level, where it was given by code.
+    pub fn height(&self) -> Option<Metres> {
+        self.aerodrome.map(Aerodrome::height)
+    }
+}
+
+impl From<Named> for Stop {
+    fn from(named: Named) -> Self {
+        let Named { label, place, aerodrome } = named;
+        let name = aerodrome.map(|a| a.name().to_string());
+        Self { label, name, place, zone: aerodrome.map(Aerodrome::zone), aerodrome }
+    }
 }
 
 /// Rates of climb and descent, each a height a minute.

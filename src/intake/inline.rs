@@ -3,10 +3,9 @@
 use super::brightness::Brightness;
 use super::draft::{Draft, Given, Origin};
 use super::flight::Flight;
-use super::place::{Named, place};
+use super::place::place;
 use super::problem::{IntakeError, Problem};
 use super::time::{date, duration_s, instant};
-use crate::places::Aerodrome;
 
 /// The texts of a flight's command-line options.
 #[derive(Debug, Clone, Default)]
@@ -63,6 +62,10 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
         polar_limits: None,
         dut1: None,
         brightness: Brightness::default(),
+        low_sun: None,
+        from_air: None,
+        to_air: None,
+        alternates: Vec::new(),
     };
     draft.checked()
 }
@@ -72,10 +75,7 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
 /// # Errors
 /// A code or coordinates that are not known, with the name of the argument.
 pub fn place_argument(argument: &'static str, text: &str) -> Result<super::Stop, IntakeError> {
-    let Given { value: Named { label, place, aerodrome }, .. } = read(argument, text, place)?;
-    let name = aerodrome.map(|a| a.name().to_string());
-    let (height, zone) = (aerodrome.map(Aerodrome::height), aerodrome.map(Aerodrome::zone));
-    Ok(super::Stop { label, name, place, height, zone })
+    read(argument, text, place).map(|given| given.value.into())
 }
 
 /// An instant given on its own.

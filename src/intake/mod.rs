@@ -5,6 +5,7 @@
 
 mod brightness;
 mod flight;
+mod ahead;
 mod problem;
 mod place;
 mod time;
@@ -12,6 +13,7 @@ mod draft;
 mod file;
 mod inline;
 
+pub use ahead::{Alternate, LowSunLimits, StationAir};
 pub use brightness::{Brightness, BrightnessError, lux_levels};
 pub use draft::Origin;
 pub use file::flight_file;

@@ -1,5 +1,6 @@
 //! What can be wrong with a flight as it was given, where it stands, and the cure.
 
+use super::ahead::{AIR_FIELDS, ALTERNATE_FIELDS, LOW_SUN_FIELDS};
 use super::brightness::BrightnessError;
 use super::draft::Origin;
 use super::file::{FIELDS, PLACE_FIELDS, POLAR_FIELDS, WAYPOINT_FIELDS};
@@ -160,6 +161,34 @@ pub enum Problem {
     /// A horizon no cloud or mountain makes.
     #[error("a horizon at {0} ft is outside 0 ft to 36000 ft")]
     Horizon(f64),
+    /// A number outside what it may be.
+    #[error("'{field}' of {given} is outside {low} to {high}")]
+    OutOfRange {
+        /// The field.
+        field: &'static str,
+        /// As given.
+        given: f64,
+        /// The least.
+        low: f64,
+        /// The most.
+        high: f64,
+    },
+    /// Too many alternates.
+    #[error("{count} alternates are more than the {most} that a flight file may have")]
+    TooManyAlternates {
+        /// How many there are.
+        count: usize,
+        /// How many there may be.
+        most: usize,
+    },
+    /// An alternate reached long after it was abeam.
+    #[error("'after' of {hours:.1} h is outside 0 h to {longest} h")]
+    AfterTooLong {
+        /// As given.
+        hours: f64,
+        /// The longest that is taken.
+        longest: f64,
+    },
 }
 
 /// A text as given, in quotes, cut short, with everything escaped that could act on a terminal.
@@ -210,7 +239,16 @@ fn unknown_place_hint(unknown: &UnknownAerodrome) -> Option<String> {
 
 /// The known field that a misspelt one shares all letters or most letters' pairs with.
 fn near_field(field: &str) -> Option<String> {
-    let known = [&FIELDS[..], &WAYPOINT_FIELDS, &PLACE_FIELDS, &POLAR_FIELDS].concat();
+    let known = [
+        &FIELDS[..],
+        &WAYPOINT_FIELDS,
+        &PLACE_FIELDS,
+        &POLAR_FIELDS,
+        &LOW_SUN_FIELDS,
+        &AIR_FIELDS,
+        &ALTERNATE_FIELDS,
+    ]
+    .concat();
     let lower = field.to_ascii_lowercase();
     let letters = |word: &str| {
         let mut bytes = word.as_bytes().to_vec();
@@ -221,7 +259,9 @@ fn near_field(field: &str) -> Option<String> {
     let given = pairs(&lower);
     let shared = |word: &str| pairs(word).iter().filter(|pair| given.contains(pair)).count();
     let exchanged = known.iter().find(|word| letters(word) == letters(&lower));
-    let alike =
-        || known.iter().max_by_key(|word| shared(word)).filter(|best| shared(best) * 2 >= best.len() - 1);
+    let alike = || {
+        let near = known.iter().filter(|word| shared(word) * 2 >= word.len() - 1);
+        near.max_by_key(|word| shared(word))
+    };
     exchanged.or_else(alike).map(|best| format!("did you mean '{best}'?"))
 }

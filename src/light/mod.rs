@@ -17,7 +17,12 @@ mod deck;
 mod trust;
 mod moon;
 mod exposure;
+mod span;
+mod ahead;
+mod abeam;
 
+pub use abeam::{Abeam, abeam};
+pub use ahead::{AheadSpan, Sector, SunAhead, Watch, ahead};
 pub use along::{Light, along, beneath};
 pub use deck::{Deck, DeckHorizon, DeckSegment, deck};
 pub use exposure::{Above, Exposure, LightMeter, LuxAt, USUAL_LEVELS, exposure};

@@ -37,7 +37,7 @@ impl Trace {
     pub(super) fn against(path: &Path, sky: &Sky, cuts: &[f64], limit: impl Fn(f64) -> Angle) -> Self {
         let window = sky.window(path.takeoff, path.landing());
         let through = |leg: &Leg, (begin_s, end_s): (f64, f64)| {
-            let band = band(leg, TRUE_SUN * MEAN_SUN_RAD_S);
+            let band = band(leg);
             Curve::through_at_least_16(begin_s, end_s, band, |t| {
                 let limits = Four::from(t.to_array().map(|t| limit(t).rad().sin()));
                 sine_of_elevation(leg.normal(t), &window.at(t)) - limits
@@ -60,7 +60,7 @@ impl Trace {
     pub fn beneath(path: &Path, sky: &Sky) -> Self {
         let window = sky.window(path.takeoff, path.landing());
         Self::fitted(path, |leg, (begin_s, end_s)| {
-            let band = band(leg, TRUE_SUN * MEAN_SUN_RAD_S);
+            let band = band(leg);
             Curve::through(begin_s, end_s, band, |t| sine_of_elevation(leg.normal(t), &window.at(t)))
         })
     }
@@ -70,7 +70,7 @@ impl Trace {
     pub fn moon_beneath(path: &Path, sky: &Sky) -> Self {
         let window = sky.moon_window(path.takeoff, path.landing());
         Self::fitted(path, |leg, span| {
-            let near = Near::new(band(leg, MOON_RAD_S));
+            let near = Near::new(band_of(leg, MOON_RAD_S));
             Curve::through_near(span, near, |t| {
                 let moon = window.at(t);
                 sine_of_elevation(leg.normal(t), &moon) - moon.sine_of_rise_limit()
@@ -111,8 +111,13 @@ impl Trace {
     }
 }
 
-/// How fast a body's elevation can turn along a leg.
-fn band(leg: &Leg, body_rad_s: f64) -> Bandwidth {
+/// How fast the Sun and the vertical turn on a leg.
+pub(super) fn band(leg: &Leg) -> Bandwidth {
+    band_of(leg, TRUE_SUN * MEAN_SUN_RAD_S)
+}
+
+/// How fast a body and the vertical turn on a leg.
+fn band_of(leg: &Leg, body_rad_s: f64) -> Bandwidth {
     Bandwidth { body_rad_s, path_rad_s: leg.speed_m_s() / wgs84::R_MIN_M }
 }
 

@@ -110,7 +110,7 @@ pub fn fly(flight: &Flight) -> Result<Path, FlightError> {
 fn heights(flight: &Flight, airborne_s: f64) -> Option<Heights> {
     let level = flight.level?;
     let Some(rates) = flight.climb else { return Some(Heights::level(level, airborne_s)) };
-    let field = |stop: &crate::intake::Stop| stop.height.map_or(0.0, |height| height.0.min(level.0));
+    let field = |stop: &crate::intake::Stop| stop.height().map_or(0.0, |height| height.0.min(level.0));
     let climb = Climb {
         from_m: field(&flight.from),
         level_m: level.0,

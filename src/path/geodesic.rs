@@ -4,7 +4,7 @@
 //! The inverse problem is left to `geographiclib-rs`. Its own line gives a point in 240 ns by way of angles; the same
 //! series written for normals takes a third of that, which is what a million flights are made of.
 
-use crate::units::{Angle, Lane, Place, Vector, wgs84};
+use crate::units::{Angle, Lane, Place, Vector, cross, dot, wgs84};
 use geographiclib_rs::{Geodesic, geodesic_capability as mask};
 
 /// Order of the series in the third flattening.
@@ -45,6 +45,20 @@ pub struct LinePoint {
     pub normal: Vector,
     /// Direction of travel from true north through east.
     pub track: Angle,
+}
+
+/// The three directions of a traveller on a line, unit vectors, Earth-fixed, for one distance or four.
+///
+/// # Shapes and units
+/// Earth-fixed they are smooth across the poles, where a track from north is not.
+#[derive(Debug, Clone, Copy)]
+pub struct Frame<L = f64> {
+    /// Outward, normal to the ellipsoid.
+    pub normal: [L; 3],
+    /// Level, in the direction of travel.
+    pub ahead: [L; 3],
+    /// Level, to the right of it.
+    pub right: [L; 3],
 }
 
 impl Line {
@@ -120,6 +134,15 @@ impl Line {
         LinePoint { normal: self.normal_at_arc(sigma, sin, cos), track }
     }
 
+    /// The traveller's frame after `distance_m` from the start.
+    #[inline]
+    pub fn frame<L: Lane>(&self, distance_m: L) -> Frame<L> {
+        let (sigma, sin, cos) = self.arc(distance_m);
+        let normal = self.normal_at_arc(sigma, sin, cos);
+        let ahead = self.tangent_at_arc(sigma, sin, cos);
+        Frame { normal, ahead, right: cross(ahead, normal) }
+    }
+
     /// σ with its sine and cosine, from the distance: eqs. 20 and 21.
     #[inline]
     fn arc<L: Lane>(&self, distance_m: L) -> (L, L, L) {
@@ -133,14 +156,37 @@ impl Line {
     /// The point's vector on the auxiliary sphere turned to its longitude, then from reduced to geodetic latitude.
     #[inline]
     fn normal_at_arc<L: Lane>(&self, sigma: L, sin: L, cos: L) -> [L; 3] {
-        // eq. 23 with eq. 8: the longitude is ω plus this, which is below 0.6° either way of the line's middle
-        let twist = L::splat(self.a3) * (sigma + sines(&self.c3, sin, cos)) - L::splat(self.twist_mid);
-        let (sin_t, cos_t) = turned(L::splat(self.sin_base), L::splat(self.cos_base), twist);
+        let (sin_t, cos_t) = self.twisted(sigma, sin, cos);
         let (x, y) = (cos, L::splat(self.sin_alpha0) * sin);
         // eq. 7 with tan φ = tan β / (1 − f)
         let z = L::splat(self.cos_alpha0 / (1.0 - wgs84::F)) * sin;
         let scale = L::splat(1.0) / (x * x + y * y + z * z).root();
         [(x * cos_t - y * sin_t) * scale, (x * sin_t + y * cos_t) * scale, z * scale]
+    }
+
+    /// The direction of travel: the place (cos σ, sin α₀ sin σ, (1 − f) cos α₀ sin σ), turned by the twist, derived by σ.
+    #[inline]
+    fn tangent_at_arc<L: Lane>(&self, sigma: L, sin: L, cos: L) -> [L; 3] {
+        let (sin_t, cos_t) = self.twisted(sigma, sin, cos);
+        let one = L::splat(1.0);
+        let k2 = L::splat(wgs84::EP2 * self.cos_alpha0 * self.cos_alpha0);
+        // eq. 8: how fast the twist grows with σ
+        let twisting = L::splat(-wgs84::F * (2.0 - wgs84::F) * self.sin_alpha0)
+            / (one + L::splat(1.0 - wgs84::F) * (one + k2 * sin * sin).root());
+        let x = L::splat(0.0) - sin * (one + twisting * L::splat(self.sin_alpha0));
+        let y = cos * (L::splat(self.sin_alpha0) + twisting);
+        let z = cos * L::splat((1.0 - wgs84::F) * self.cos_alpha0);
+        let tangent = [x * cos_t - y * sin_t, x * sin_t + y * cos_t, z];
+        let scale = one / dot(tangent, tangent).root();
+        tangent.map(|part| part * scale)
+    }
+
+    /// Sine and cosine of the turn about the axis from the auxiliary sphere to the Earth: eq. 23 with eq. 8. The longitude
+    /// is ω plus this, which is below 0.6° either way of its value at the line's middle.
+    #[inline]
+    fn twisted<L: Lane>(&self, sigma: L, sin: L, cos: L) -> (L, L) {
+        let twist = L::splat(self.a3) * (sigma + sines(&self.c3, sin, cos)) - L::splat(self.twist_mid);
+        turned(L::splat(self.sin_base), L::splat(self.cos_base), twist)
     }
 
     /// Distance from the start to the point of arc σ: eq. 18.
@@ -262,7 +308,33 @@ fn longitude_series(eps: f64, sin_alpha0: f64) -> (f64, [f64; ORDER - 1]) {
 #[cfg(test)]
 mod tests {
     use super::Line;
-    use crate::units::Place;
+    use crate::units::{Place, dot};
+
+    #[test]
+    fn the_frame_stands_upright_and_looks_where_the_line_goes() {
+        for ((a, b), (c, d)) in
+            [((43.7, -79.6), (22.3, 113.9)), ((0.0, 10.0), (-33.0, 80.0)), ((90.0, 0.0), (10.0, 9.0))]
+        {
+            let line = Line::between(Place::from_deg(a, b).unwrap(), Place::from_deg(c, d).unwrap());
+            for i in 1..20 {
+                let at = line.length_m() * f64::from(i) / 20.0;
+                let frame = line.frame(at);
+                let (before, after) = (line.normal(at - 500.0), line.normal(at + 500.0));
+                let step: [f64; 3] = std::array::from_fn(|i| after[i] - before[i]);
+                let length = dot(step, step).sqrt();
+                assert!(
+                    dot(frame.ahead, frame.normal).abs() < 1e-14
+                        && dot(frame.right, frame.ahead).abs() < 1e-14
+                );
+                // the normal's own derivative leaves the direction of travel by the geodesic's torsion, f at most
+                assert!(dot(step, frame.right).abs() / length < 0.0034, "{at}");
+                let (sin, cos) = line.at(at).track.rad().sin_cos();
+                let lon = Place::from_normal(frame.normal).lon.angle().rad();
+                assert!((dot(frame.ahead, [-lon.sin(), lon.cos(), 0.0]) - sin).abs() < 1e-12, "{at}");
+                assert!((dot(frame.right, [-lon.sin(), lon.cos(), 0.0]) - cos).abs() < 1e-12, "{at}");
+            }
+        }
+    }
 
     #[test]
     fn a_line_ends_where_it_should() {

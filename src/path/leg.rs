@@ -1,6 +1,6 @@
 //! One leg: a geodesic flown at a constant ground speed.
 
-use super::geodesic::{Line, LinePoint};
+use super::geodesic::{Frame, Line, LinePoint};
 use crate::units::{Lane, Place};
 
 /// A geodesic and the seconds, counted from take-off, between which it is flown.
@@ -43,6 +43,12 @@ impl Leg {
     #[inline]
     pub fn normal<L: Lane>(&self, seconds: L) -> [L; 3] {
         self.line.normal((seconds - L::splat(self.begin_s)) * L::splat(self.speed_m_s))
+    }
+
+    /// The traveller's directions; on a leg that leads nowhere those ahead and to the right mean nothing.
+    #[inline]
+    pub fn frame<L: Lane>(&self, seconds: L) -> Frame<L> {
+        self.line.frame((seconds - L::splat(self.begin_s)) * L::splat(self.speed_m_s))
     }
 
     /// Normal and track.

@@ -12,6 +12,6 @@ mod extent;
 pub use circle::{Circle, CircleCrossing, CircleName, Heading, circles};
 pub use extent::Passed;
 pub use fly::{FlightError, Path, Position, fly};
-pub use geodesic::{Line, LinePoint};
+pub use geodesic::{Frame, Line, LinePoint};
 pub use height::Heights;
 pub use leg::Leg;

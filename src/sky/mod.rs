@@ -21,9 +21,10 @@ pub use almanac::Almanac;
 pub use horizon::{Horizon, HorizonError};
 pub use illuminance::{Lux, moonlight, sunlight};
 pub use moon::{MoonPlace, Phase};
-pub use observer::{Body, GeometricElevation, azimuth, elevation, sine_of_elevation};
+pub use observer::{Body, GeometricElevation, azimuth, elevation, level_part, sine_of_elevation};
 pub use refraction::{
     ApparentElevation, GroundAir, HORIZONTAL_REFRACTION, apparent_aloft, apparent_from_ground,
+    geometric_aloft,
 };
 pub use sun::SunPlace;
 pub use table::{MoonWindow, Sky, SunWindow};

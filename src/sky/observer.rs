@@ -46,6 +46,23 @@ pub fn sine_of_elevation<L: Lane>(normal: [L; 3], body: &impl Body<L>) -> L {
     (d * dot(normal, direction) - radius_au * w * w) / range * (one - eastward)
 }
 
+/// How far a body's direction lies along a level unit vector at the foot of an ellipsoid normal: the cosine of its
+/// elevation times that of its bearing from the vector.
+///
+/// # Shapes and units
+/// As [`sine_of_elevation`], parallax and diurnal aberration included.
+#[inline]
+pub fn level_part<L: Lane>(normal: [L; 3], level: [L; 3], body: &impl Body<L>) -> L {
+    let [one, two] = [1.0, 2.0].map(L::splat);
+    let [x, y, z] = normal;
+    let radius_au = L::splat(wgs84::A_M / AU_M) / (one - L::splat(wgs84::E2) * z * z).root();
+    let place = [radius_au * x, radius_au * y, radius_au * L::splat(1.0 - wgs84::E2) * z];
+    let (direction, d) = (body.direction(), body.distance_au());
+    let range = (d * (d - two * dot(place, direction)) + dot(place, place)).root();
+    let spun = L::splat(SPIN_PER_AU) * (place[0] * level[1] - place[1] * level[0]);
+    (d * dot(direction, level) - dot(place, level)) / range + spun
+}
+
 /// A body's geometric elevation at a place.
 pub fn elevation(place: Place, body: &impl Body) -> GeometricElevation {
     let [east, north, up] = horizontal(place, body);

@@ -93,6 +93,13 @@ pub fn apparent_aloft(geometric: GeometricElevation, height: Metres) -> Apparent
     ApparentElevation(Angle::from_rad(zero(off, low, high)))
 }
 
+/// The geometric elevation of a body that an observer at a height sees at an apparent elevation, which must not lie below
+/// the sea's horizon: the inverse of [`apparent_aloft`], by one ray.
+pub fn geometric_aloft(apparent: ApparentElevation, height: Metres) -> GeometricElevation {
+    let height_m = height.0.clamp(Horizon::HEIGHTS.start().0, Horizon::HEIGHTS.end().0);
+    GeometricElevation(apparent.0 - Angle::from_rad(bending_aloft_rad(apparent.0.rad(), height_m)))
+}
+
 /// How far the ray turns that an observer at a height sees at an apparent elevation, in radians.
 fn bending_aloft_rad(seen_rad: f64, height_m: f64) -> f64 {
     if seen_rad > STEEP_RAD {
@@ -133,7 +140,7 @@ fn zero(f: impl Fn(f64) -> f64, low: f64, high: f64) -> f64 {
 
 #[cfg(test)]
 mod tests {
-    use super::{GroundAir, apparent_aloft, apparent_from_ground};
+    use super::{ApparentElevation, GroundAir, apparent_aloft, apparent_from_ground, geometric_aloft};
     use crate::sky::{GeometricElevation, Horizon};
     use crate::units::{Angle, Metres};
 
@@ -189,6 +196,18 @@ mod tests {
                 last = seen;
             }
             assert!((last - 90.0).abs() < 1e-6, "{last}");
+        }
+    }
+
+    #[test]
+    fn what_is_seen_at_an_elevation_stands_where_it_is_seen_from() {
+        for feet in [0.0, 12_000.0, 41_000.0] {
+            for deg in [-0.1_f64, 0.0, 4.0, 15.0, 79.0, 89.0] {
+                let height = Metres::from_feet(feet);
+                let apparent = ApparentElevation(Angle::from_deg(if feet == 0.0 { deg.abs() } else { deg }));
+                let back = apparent_aloft(geometric_aloft(apparent, height), height);
+                assert!((back.0 - apparent.0).deg().abs() < 1e-6, "{feet} ft, {deg}°");
+            }
         }
     }
 

@@ -18,4 +18,4 @@ pub use lane::{Four, Lane};
 pub use metres::Metres;
 pub use place::{Latitude, Longitude, Place, PlaceError};
 pub use ut1::{DUT1_BOUND_S, Dut1, Dut1Error};
-pub use vector::{Vector, dot};
+pub use vector::{Vector, cross, dot};

@@ -10,3 +10,9 @@ pub type Vector = [f64; 3];
 pub fn dot<L: Lane>(a: [L; 3], b: [L; 3]) -> L {
     a[0] * b[0] + a[1] * b[1] + a[2] * b[2]
 }
+
+/// The vector product.
+#[inline]
+pub fn cross<L: Lane>(a: [L; 3], b: [L; 3]) -> [L; 3] {
+    [a[1] * b[2] - a[2] * b[1], a[2] * b[0] - a[0] * b[2], a[0] * b[1] - a[1] * b[0]]
+}

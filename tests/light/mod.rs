@@ -1,5 +1,6 @@
 //! The light along flights.
 
+mod ahead;
 mod crossings;
 mod deck;
 mod exposure;
@@ -14,7 +15,7 @@ use gloamline::units::Place;
 
 /// A flight through timed points, from take-off to landing.
 pub(crate) fn flight(name: &str, takeoff: gloamline::units::Instant, points: &[(Place, f64)]) -> Flight {
-    let stop = |place| Stop { label: name.to_string(), name: None, place, height: None, zone: None };
+    let stop = |place| Stop { label: name.to_string(), name: None, place, zone: None, aerodrome: None };
     let (first, last) = (points[0], points[points.len() - 1]);
     let waypoints = points[1..points.len() - 1].iter().map(|&(place, s)| RoutePoint {
         label: String::new(),
@@ -34,6 +35,10 @@ pub(crate) fn flight(name: &str, takeoff: gloamline::units::Instant, points: &[(
         polar_limits: None,
         dut1: None,
         brightness: gloamline::intake::Brightness::default(),
+        low_sun: None,
+        from_air: None,
+        to_air: None,
+        alternates: Vec::new(),
     }
 }
 

@@ -15,6 +15,7 @@ mod events;
 mod captions;
 mod clocks;
 mod strip;
+mod low_sun;
 
 use crate::Brief;
 use crate::charts::canvas::{Canvas, CanvasError, Size};
@@ -61,6 +62,7 @@ pub fn timeline(brief: &Brief) -> Result<Canvas, CanvasError> {
     curve::draw(&mut canvas, &curve, &frame);
     captions.draw(&mut canvas, &events, &frame);
     strip::draw(&mut canvas, &brief.light.segments, (layout.strip(), &frame));
+    low_sun::draw(&mut canvas, &brief.low_sun, (layout.strip(), &frame));
     for (clock, top) in clocks.iter().zip(layout.clock_tops()) {
         clock.draw(&mut canvas, top, &frame);
     }

@@ -13,6 +13,7 @@ pub(in crate::charts) const RULE: Ink = Ink::hex(0x7d8694);
 pub(in crate::charts) const CURVE: Ink = Ink::hex(0x10161f);
 pub(in crate::charts) const CIRCLE: Ink = Ink::hex(0x7a1f3d);
 pub(super) const DECK: Ink = Ink::hex(0x0b5a52);
+pub(super) const SUN: Ink = Ink::hex(0xa84300);
 pub(in crate::charts) const PLATE: Ink = Ink::WHITE.with_alpha(0.88);
 
 /// The smallest letters of the picture.

@@ -1,6 +1,8 @@
 //! The brief as a record for machines: schema 1. Later versions add to it and rename nothing.
 
+mod ahead;
 mod aloft;
+mod alternates;
 mod beneath;
 mod flight;
 mod illuminance;
@@ -26,6 +28,10 @@ pub(super) struct Record {
     aloft: Option<aloft::AloftRecord>,
     moon: moon::MoonRecord,
     illuminance: illuminance::IlluminanceRecord,
+    low_sun: Vec<ahead::LowSunRecord>,
+    low_sun_limits: ahead::LowSunLimitsRecord,
+    runways: [ahead::RunwaysRecord; 2],
+    alternates: Vec<alternates::AlternateRecord>,
     circles: Vec<CircleRecord>,
     northernmost: PointRecord,
     southernmost: PointRecord,
@@ -58,6 +64,10 @@ impl Record {
             aloft: brief.deck.as_ref().map(|view| aloft::AloftRecord::of(brief, view)),
             moon: moon::MoonRecord::of(brief),
             illuminance: illuminance::IlluminanceRecord::of(brief),
+            low_sun: ahead::low_sun(brief),
+            low_sun_limits: ahead::LowSunLimitsRecord::of(brief),
+            runways: ahead::runways(brief),
+            alternates: alternates::alternates(brief),
             circles: circles(brief),
             northernmost: point(brief, brief.northernmost),
             southernmost: point(brief, brief.southernmost),

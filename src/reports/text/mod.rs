@@ -6,6 +6,8 @@ mod beneath;
 mod aloft;
 mod moon;
 mod brightness;
+mod ahead;
+mod alternates;
 mod route;
 
 use super::table::wrapped;
@@ -26,6 +28,9 @@ pub fn text(brief: &Brief) -> String {
         aloft::deck(brief),
         moon::moon(brief),
         brightness::brightness(brief),
+        ahead::low_sun(brief),
+        ahead::runways(brief),
+        alternates::alternates(brief),
         route::extremes(brief),
         route::circles(brief),
         cautions(brief),
