@@ -16,5 +16,8 @@ mod sun_brief;
 pub mod charts;
 pub mod reports;
 
-pub use brief::{AlternateView, Brief, DeckView, Glare, Polar, RunwaySun, RunwayView, brief};
+pub use brief::{
+    AlternateView, Brief, DeckView, ExposureView, Glare, Inside, MoonView, Polar, RunwaySun, RunwayView,
+    brief,
+};
 pub use sun_brief::{PlaceDay, SunBrief, sun_brief};

@@ -4,10 +4,14 @@ mod ahead;
 mod alternates;
 mod boundary;
 mod deck;
+mod exposure;
+mod moon;
 mod runways;
 
 pub use alternates::{AlternateView, Polar};
 pub use deck::DeckView;
+pub use exposure::{ExposureView, Inside};
+pub use moon::MoonView;
 pub use runways::{Glare, RunwaySun, RunwayView};
 
 use crate::intake::{Flight, LowSunLimits, PolarLimits};
@@ -51,6 +55,10 @@ pub struct Brief {
     pub at_lowest: Sample,
     /// The Sun each minute from take-off, and at landing.
     pub minutes: Vec<Sample>,
+    /// The Moon.
+    pub moon: MoonView,
+    /// The brightness outside.
+    pub exposure: ExposureView,
     /// The circles crossed.
     pub circles: Vec<CircleCrossing>,
     /// Where the polar areas were taken to begin.
@@ -87,6 +95,8 @@ pub fn brief(flight: Flight, sky: &Sky) -> Result<Brief, FlightError> {
     let at_waypoints = path.waypoints_s().iter().map(|&at_s| lookout.at(at_s)).collect();
     let (at_highest, at_lowest) = (lookout.at(light.highest.at_s), lookout.at(light.lowest.at_s));
     let minutes = lookout.every_s(STEP_S);
+    let moon = moon::view((&path, sky), &light, &minutes);
+    let exposure = exposure::view((&path, sky), (&trace, &moon.moon), &minutes, &flight.brightness);
     let polar_limits = flight.polar_limits.unwrap_or_default();
     let low_sun_limits = flight.low_sun.unwrap_or_default();
     let ends = (&minutes[0], &minutes[minutes.len() - 1]);
@@ -113,6 +123,8 @@ pub fn brief(flight: Flight, sky: &Sky) -> Result<Brief, FlightError> {
         at_highest,
         at_lowest,
         minutes,
+        moon,
+        exposure,
         light,
         path,
         flight,

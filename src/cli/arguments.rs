@@ -14,7 +14,7 @@ pub(super) struct Arguments {
 #[derive(Debug, Subcommand)]
 pub(super) enum Command {
     /// Brief flights: states, sunrises and sunsets, twilights and circles along the route
-    Brief(BriefRequest),
+    Brief(Box<BriefRequest>),
     /// The Sun's almanac quantities at an instant, a place's day, or a year's equinoxes and solstices
     Sun(SunRequest),
     /// A place's civil days: sunrise, sunset, twilights, transit, polar day and night, the Moon
@@ -62,6 +62,10 @@ pub(super) struct BriefRequest {
     /// Latitude in degrees south at which the South Polar Area begins [default: 60]
     #[arg(long, value_name = "DEGREES")]
     pub(super) south_polar_area: Option<f64>,
+
+    /// Levels of brightness in lux to count the time above, for flight files that give none [default: 1,10,100,1000,10000]
+    #[arg(long, value_name = "LUX,...", value_delimiter = ',', allow_hyphen_values = true)]
+    pub(super) lux_levels: Option<Vec<f64>>,
 }
 
 #[derive(Debug, Args)]

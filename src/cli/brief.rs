@@ -5,7 +5,8 @@ use super::arguments::{BriefRequest, Form};
 use super::files::{self, Batch, FileError};
 use super::terminal;
 use gloamline::intake::{
-    Flight, Inline, IntakeError, Origin, PolarLimits, Problem, flight_file, inline_flight,
+    BrightnessError, Flight, Inline, IntakeError, Origin, PolarLimits, Problem, flight_file, inline_flight,
+    lux_levels,
 };
 use gloamline::sky::Sky;
 use gloamline::units::{Dut1, Dut1Error, PlaceError};
@@ -37,6 +38,7 @@ struct Common {
     dut1: Dut1,
     sky: Sky,
     polar_limits: Option<PolarLimits>,
+    levels_lux: Option<Vec<f64>>,
 }
 
 /// Briefs every flight asked for; a bad one does not keep the others back.
@@ -78,6 +80,8 @@ enum OptionError {
     Dut1(#[from] Dut1Error),
     #[error("--north-polar-area, --south-polar-area: {0}")]
     Polar(#[from] PlaceError),
+    #[error("--lux-levels: {0}")]
+    Levels(#[from] BrightnessError),
 }
 
 fn common(request: &BriefRequest) -> Result<Common, OptionError> {
@@ -87,7 +91,8 @@ fn common(request: &BriefRequest) -> Result<Common, OptionError> {
     let north = request.north_polar_area.unwrap_or(usual.north.deg());
     let south = request.south_polar_area.unwrap_or(-usual.south.deg());
     let polar_limits = if given { Some(PolarLimits::from_deg(north, south)?) } else { None };
-    Ok(Common { dut1, sky: Sky::new(dut1), polar_limits })
+    let levels_lux = request.lux_levels.clone().map(lux_levels).transpose()?;
+    Ok(Common { dut1, sky: Sky::new(dut1), polar_limits, levels_lux })
 }
 
 /// Each flight with the name of its source, read one at a time.
@@ -127,6 +132,7 @@ fn read_flight(path: &Path) -> Result<(Flight, String), Refusal> {
 
 fn briefed(mut flight: Flight, source_name: &str, common: &Common) -> Result<Brief, Refusal> {
     flight.polar_limits = flight.polar_limits.or(common.polar_limits);
+    flight.brightness.levels_lux = flight.brightness.levels_lux.or_else(|| common.levels_lux.clone());
     let own_sky = flight.dut1.filter(|dut1| *dut1 != common.dut1).map(Sky::new);
     let sky = own_sky.as_ref().unwrap_or(&common.sky);
     brief(flight, sky).map_err(|error| Refusal::Flight { source_name: source_name.to_string(), error })

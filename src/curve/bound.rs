@@ -18,7 +18,8 @@
 //!   add less than 1 %.
 //!
 //! Together `M ≤ 1.2 e^(h (z_s + 1.158 z_p))` with h = (ρ − 1/ρ)/2, `z_s = ωT/2`, `z_p = vT/(2b)`, for each ρ with
-//! `1.158 z_p h ≤ Y`. The bound below takes the best such ρ.
+//! `1.158 z_p h ≤ Y`. The bound below takes the best such ρ. A body as near as the Moon has a bound of its own, in
+//! [`super::near`].
 
 use super::nodes::{MAX_NODES, SIZES};
 
@@ -39,30 +40,34 @@ impl Bandwidth {
 }
 
 /// Largest growth of the arc's rate within the strip, 1/√(1 − q).
-const STRIP_SPEED: f64 = 1.158;
+pub(super) const STRIP_SPEED: f64 = 1.158;
 /// Half-width of the strip of complex arc in which the geodesic is used.
-const STRIP: f64 = 2.5;
+pub(super) const STRIP: f64 = 2.5;
 /// The factors of M that do not grow with the ellipse.
 const CONSTANT: f64 = 4.0 * 1.2;
 /// What is asked of a curve: an interpolation error in sine of elevation below 0.0004″.
-const TARGET: f64 = 2e-9;
+pub(super) const TARGET: f64 = 2e-9;
 
 /// A bound on the interpolation error, in the curve's own unit, of a unit-bounded curve of `seconds` on `n` nodes.
 pub fn error_bound(n: usize, band: Bandwidth, seconds: f64) -> f64 {
     let half = seconds / 2.0;
     let path = (STRIP_SPEED * band.path_rad_s * half).max(1e-12);
     let z = (band.body_rad_s * half + path).max(1e-9);
+    on_ellipse(n, z, STRIP / path, CONSTANT)
+}
+
+/// `constant` e^(h z) ρ^−(n−1) / (ρ − 1) on the best ellipse whose h is no larger than `h_cap`.
+pub(super) fn on_ellipse(n: usize, z: f64, h_cap: f64, constant: f64) -> f64 {
     let degree = (n - 1) as f64;
     // the best ρ solves z (1 + ρ⁻²)/2 = degree/ρ; the strip caps h, and 1e6 keeps the powers finite
     let ratio = degree / z;
     let best = if ratio > 1.0 { ratio + (ratio * ratio - 1.0).sqrt() } else { 1.0 };
-    let h_cap = STRIP / path;
     let rho = best.min(h_cap + (h_cap * h_cap + 1.0).sqrt()).min(1e6);
     if rho <= 1.01 {
         return f64::INFINITY;
     }
     let h = (rho - 1.0 / rho) / 2.0;
-    CONSTANT * (h * z - degree * rho.ln()).exp() / (rho - 1.0)
+    constant * (h * z - degree * rho.ln()).exp() / (rho - 1.0)
 }
 
 /// The place in the list of sizes of the fewest nodes that keep the error below 2e−9 (0.0004″ of elevation) over

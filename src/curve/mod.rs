@@ -10,12 +10,14 @@
 //! every excursion of f across a level that is higher than ε is found, however short it is, and none is invented.
 
 mod bound;
+mod near;
 mod nodes;
 mod polynomial;
 mod turning;
 mod root;
 
 pub use bound::{Bandwidth, error_bound, nodes_for};
+pub use near::Near;
 pub use nodes::{MAX_NODES, coefficients, lobatto};
 pub use polynomial::Curve;
 pub use turning::TurningPoints;

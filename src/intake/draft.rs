@@ -1,6 +1,7 @@
 //! A flight as given, each value with where it stands, and the checks that make it a [`Flight`].
 
 use super::ahead::{Alternate, LowSunLimits, StationAir};
+use super::brightness::Brightness;
 use super::flight::{ClimbRates, Flight, PolarLimits, RoutePoint, Stop};
 use super::place::Named;
 use super::problem::{IntakeError, Problem};
@@ -63,6 +64,7 @@ pub(super) struct Draft {
     pub(super) waypoints: Vec<Given<RoutePoint>>,
     pub(super) polar_limits: Option<PolarLimits>,
     pub(super) dut1: Option<Dut1>,
+    pub(super) brightness: Brightness,
     pub(super) low_sun: Option<LowSunLimits>,
     pub(super) from_air: Option<StationAir>,
     pub(super) to_air: Option<StationAir>,
@@ -112,6 +114,7 @@ impl Draft {
             waypoints: self.waypoints.into_iter().map(|w| w.value).collect(),
             polar_limits: self.polar_limits,
             dut1: self.dut1,
+            brightness: self.brightness,
             low_sun: self.low_sun,
             from_air: self.from_air,
             to_air: self.to_air,

@@ -1,6 +1,7 @@
 //! Flight files: TOML, read value by value so that each error names its line and column.
 
 use super::ahead::{Alternate, air, alternates, low_sun};
+use super::brightness::{Brightness, lux_levels, share};
 use super::draft::{Draft, Given, MOST_WAYPOINTS, Origin};
 use super::flight::{Flight, PolarLimits, RoutePoint};
 use super::place::{Named, degrees, place};
@@ -12,7 +13,7 @@ use toml::Spanned;
 use toml::de::{DeTable, DeValue};
 
 /// What a flight file may hold.
-pub(super) const FIELDS: [&str; 17] = [
+pub(super) const FIELDS: [&str; 20] = [
     "name",
     "from",
     "to",
@@ -26,6 +27,9 @@ pub(super) const FIELDS: [&str; 17] = [
     "dut1_s",
     "waypoint",
     "polar_areas",
+    "lux_levels",
+    "transmittance",
+    "view_factor",
     "low_sun",
     "from_air",
     "to_air",
@@ -107,6 +111,7 @@ impl Reader<'_> {
             waypoints: table.get("waypoint").map_or(Ok(Vec::new()), |v| self.waypoints(v))?,
             polar_limits: table.get("polar_areas").map(polar_limits).transpose()?,
             dut1: table.get("dut1_s").map(dut1).transpose()?,
+            brightness: brightness(table)?,
             low_sun: table.get("low_sun").map(low_sun).transpose()?,
             from_air: table.get("from_air").map(|v| air("from_air", v)).transpose()?,
             to_air: table.get("to_air").map(|v| air("to_air", v)).transpose()?,
@@ -250,4 +255,25 @@ fn polar_limits(value: &Value<'_>) -> Found<PolarLimits> {
 
 fn dut1(value: &Value<'_>) -> Found<Dut1> {
     Dut1::from_s(number("dut1_s", value)?).map_err(|error| (value.span(), error.into()))
+}
+
+fn brightness(table: &DeTable<'_>) -> Found<Brightness> {
+    let factor = |field: &'static str| {
+        let value = table.get(field);
+        let read = |v| share(field, number(field, v)?).map_err(|error| (v.span(), error.into()));
+        value.map(read).transpose()
+    };
+    Ok(Brightness {
+        levels_lux: table.get("lux_levels").map(levels).transpose()?,
+        transmittance: factor("transmittance")?,
+        view_factor: factor("view_factor")?,
+    })
+}
+
+fn levels(value: &Value<'_>) -> Found<Vec<f64>> {
+    let Some(list) = value.get_ref().as_array() else {
+        return Err(wrong("lux_levels", value.get_ref(), "an array of numbers", value.span()));
+    };
+    let given = list.iter().map(|one| number("lux_levels", one)).collect::<Found<_>>()?;
+    lux_levels(given).map_err(|error| (value.span(), error.into()))
 }

@@ -1,6 +1,7 @@
 //! A flight as its planner holds it: two ends, two times, perhaps points between.
 
 use super::ahead::{Alternate, LowSunLimits, StationAir};
+use super::brightness::Brightness;
 use super::place::Named;
 use crate::places::Aerodrome;
 use crate::units::{Dut1, Instant, Latitude, Metres, Place, PlaceError};
@@ -31,6 +32,8 @@ pub struct Flight {
     pub polar_limits: Option<PolarLimits>,
     /// UT1 − UTC on its date, if the planner knows it.
     pub dut1: Option<Dut1>,
+    /// What the planner asks about the brightness outside.
+    pub brightness: Brightness,
     /// What counts as a low Sun ahead, if not what usually does.
     pub low_sun: Option<LowSunLimits>,
     /// The air at take-off, where known.

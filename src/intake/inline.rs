@@ -1,5 +1,6 @@
 //! A flight given on the command line instead of in a file.
 
+use super::brightness::Brightness;
 use super::draft::{Draft, Given, Origin};
 use super::flight::Flight;
 use super::place::place;
@@ -60,6 +61,7 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
         waypoints: Vec::new(),
         polar_limits: None,
         dut1: None,
+        brightness: Brightness::default(),
         low_sun: None,
         from_air: None,
         to_air: None,

@@ -3,6 +3,7 @@
 //! Is given text and the name of its source; never opens a file. What needs a geodesic (speeds, a flight of no length)
 //! is checked where the geodesics are, in `path`.
 
+mod brightness;
 mod flight;
 mod ahead;
 mod problem;
@@ -13,6 +14,7 @@ mod file;
 mod inline;
 
 pub use ahead::{Alternate, LowSunLimits, StationAir};
+pub use brightness::{Brightness, BrightnessError, lux_levels};
 pub use draft::Origin;
 pub use file::flight_file;
 pub use flight::{ClimbRates, Flight, PolarLimits, RoutePoint, Stop};

@@ -1,6 +1,7 @@
 //! What can be wrong with a flight as it was given, where it stands, and the cure.
 
 use super::ahead::{AIR_FIELDS, ALTERNATE_FIELDS, LOW_SUN_FIELDS};
+use super::brightness::BrightnessError;
 use super::draft::Origin;
 use super::file::{FIELDS, PLACE_FIELDS, POLAR_FIELDS, WAYPOINT_FIELDS};
 use crate::places::UnknownAerodrome;
@@ -62,6 +63,9 @@ pub enum Problem {
     /// A UT1 − UTC that cannot be.
     #[error(transparent)]
     Dut1(#[from] Dut1Error),
+    /// A level or share of light that cannot be.
+    #[error(transparent)]
+    Brightness(#[from] BrightnessError),
     /// A code that is not known.
     #[error(transparent)]
     UnknownAerodrome(UnknownAerodrome),

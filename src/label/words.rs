@@ -72,6 +72,14 @@ pub(crate) fn event_key(event: Event) -> &'static str {
     }
 }
 
+/// A moonrise's or moonset's key.
+pub(crate) fn moon_event_key(direction: Direction) -> &'static str {
+    match direction {
+        Direction::Rising => "moonrise",
+        Direction::Setting => "moonset",
+    }
+}
+
 /// A circle's key.
 pub(crate) fn circle_key(circle: CircleName) -> &'static str {
     match circle {

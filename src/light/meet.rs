@@ -62,13 +62,32 @@ enum Side {
     Undecided,
 }
 
+/// A body meets a level.
+pub(super) enum Meeting {
+    /// So many seconds from take-off, upwards or downwards.
+    Crossing(f64, Direction),
+    /// It turns too near to the level to be decided.
+    Touch(Peak),
+}
+
 /// Finds a limit's crossings and touches; appends both.
 pub(super) fn meetings(trace: &Trace, at: Level, crossings: &mut Vec<Crossing>, touches: &mut Vec<Touch>) {
-    let (limit, level) = (at.limit, at.sine());
+    let (limit, level, cosine) = (at.limit, at.sine(), at.elevation.rad().cos());
+    search(trace, level, TOUCH.rad() * cosine, |meeting| match meeting {
+        Meeting::Crossing(at_s, direction) => crossings.push(Crossing { at_s, limit, direction }),
+        Meeting::Touch(peak) => {
+            let margin = Angle::from_rad((peak.sine - level) / cosine);
+            touches.push(Touch { at_s: peak.at_s, limit, margin });
+        }
+    });
+}
+
+/// Tells every meeting of a trace with a level, in order of time; a turn within `margin` of it is a touch.
+#[inline]
+pub(super) fn search(trace: &Trace, level: f64, margin: f64, mut tell: impl FnMut(Meeting)) {
     let peaks = trace.peaks();
     let last = peaks.len() - 1;
     let strict = |i: usize| if peaks[i].sine >= level { Side::Above } else { Side::Below };
-    let margin = TOUCH.rad() * at.elevation.rad().cos();
     let side = |i: usize| {
         let near = (peaks[i].sine - level).abs() < margin && i > 0 && i < last;
         if near { Side::Undecided } else { strict(i) }
@@ -80,19 +99,20 @@ pub(super) fn meetings(trace: &Trace, at: Level, crossings: &mut Vec<Crossing>, 
         }
         if side(from) == side(to) {
             // a run of undecided peaks between two on one side: the one nearest to the far side is the touch
-            touches.extend(touch(&peaks[from..=to], at));
+            if let Some(peak) = touch(&peaks[from..=to], level) {
+                tell(Meeting::Touch(peak));
+            }
         } else {
             let before = (from..to).find(|&i| strict(i) != strict(i + 1)).unwrap_or(from);
             let direction = if side(to) == Side::Above { Direction::Rising } else { Direction::Setting };
-            crossings.push(Crossing { at_s: trace.meets(level, before), limit, direction });
+            tell(Meeting::Crossing(trace.meets(level, before), direction));
         }
         from = to;
     }
 }
 
 /// The touch within a run of peaks whose ends lie on one side, if there are peaks between them.
-fn touch(run: &[Peak], at: Level) -> Option<Touch> {
-    let level = at.sine();
+fn touch(run: &[Peak], level: f64) -> Option<Peak> {
     let inner = run.get(1..run.len() - 1)?;
     let from_above = run[0].sine >= level;
     let deepest =
@@ -100,9 +120,5 @@ fn touch(run: &[Peak], at: Level) -> Option<Touch> {
     let peak = inner.iter().min_by(deepest)?;
     // a Sun that only passes from one curve to the next here does not turn
     let lies_beyond = |end: &Peak| if from_above { peak.sine < end.sine } else { peak.sine > end.sine };
-    if !(lies_beyond(&run[0]) && lies_beyond(&run[run.len() - 1])) {
-        return None;
-    }
-    let margin = Angle::from_rad((peak.sine - level) / at.elevation.rad().cos());
-    Some(Touch { at_s: peak.at_s, limit: at.limit, margin })
+    (lies_beyond(&run[0]) && lies_beyond(&run[run.len() - 1])).then_some(*peak)
 }

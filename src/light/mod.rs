@@ -15,6 +15,8 @@ mod along;
 mod sample;
 mod deck;
 mod trust;
+mod moon;
+mod exposure;
 mod span;
 mod ahead;
 mod abeam;
@@ -23,8 +25,13 @@ pub use abeam::{Abeam, abeam};
 pub use ahead::{AheadSpan, Sector, SunAhead, Watch, ahead};
 pub use along::{Light, along, beneath};
 pub use deck::{Deck, DeckHorizon, DeckSegment, deck};
+pub use exposure::{Above, Exposure, LightMeter, LuxAt, USUAL_LEVELS, exposure};
 pub use limit::{Direction, Event, Limit, State};
 pub use meet::{Crossing, TOUCH, Touch};
+pub use moon::{
+    MOON_TOUCH, MoonCrossing, MoonLight, MoonLookout, MoonSample, MoonSegment, MoonTouch, Moonlit,
+    moon_beneath,
+};
 pub use sample::{Lookout, Sample};
 pub use segment::{Segment, StateSeconds};
 pub use trace::{Peak, Trace};

@@ -1,15 +1,18 @@
-//! The sine of the Sun's elevation over a whole path: one curve for each stretch, and the points where it turns.
+//! The sine of the Sun's or the Moon's elevation over a whole path: one curve for each stretch, and the points where it turns.
 
-use crate::curve::{Bandwidth, Curve};
+use crate::curve::{Bandwidth, Curve, Near};
 use crate::path::{Leg, Path};
-use crate::sky::{MEAN_SUN_RAD_S, Sky, SunWindow, sine_of_elevation};
+use crate::sky::{MEAN_SUN_RAD_S, Sky, sine_of_elevation};
 use crate::units::{Angle, Four, wgs84};
 
 /// The Sun's true rate about the axis exceeds the mean one by less than this factor: the equation of time changes by
 /// less than 30 s a day and the declination by less than 0.4° a day, which is 0.0012 of a turn together.
 const TRUE_SUN: f64 = 1.003;
+/// The Moon's rate about the axis in rad/s, as a bound: the Earth's own turn (IERS Conventions 2010, table 1.2) and the
+/// Moon's motion against the stars, at most 16° a day, as if they added up; in fact it follows the turn, at 14.49° an hour.
+const MOON_RAD_S: f64 = 7.292_115e-5 + 16.0 / 86_400.0 * (std::f64::consts::PI / 180.0);
 
-/// The sine of the Sun's elevation along a path, ready to be searched.
+/// The sine of the Sun's elevation along a path, or by how much the Moon's exceeds its limit's, ready to be searched.
 #[derive(Debug, Clone)]
 pub struct Trace {
     curves: Vec<Curve>,
@@ -22,7 +25,7 @@ pub struct Trace {
 pub struct Peak {
     /// Seconds from take-off.
     pub at_s: f64,
-    /// Sine of the geometric elevation.
+    /// Sine of the geometric elevation; for the Moon less the sine of its limit.
     pub sine: f64,
     /// Which curve leads on from here.
     pub(super) curve: usize,
@@ -33,12 +36,19 @@ impl Trace {
     /// given in seconds from take-off in rising order, and 16 nodes hold it there.
     pub(super) fn against(path: &Path, sky: &Sky, cuts: &[f64], limit: impl Fn(f64) -> Angle) -> Self {
         let window = sky.window(path.takeoff, path.landing());
+        let through = |leg: &Leg, (begin_s, end_s): (f64, f64)| {
+            let band = band(leg);
+            Curve::through_at_least_16(begin_s, end_s, band, |t| {
+                let limits = Four::from(t.to_array().map(|t| limit(t).rad().sin()));
+                sine_of_elevation(leg.normal(t), &window.at(t)) - limits
+            })
+        };
         let mut curves = Vec::with_capacity(path.legs().len() + cuts.len());
         for leg in path.legs() {
             let inner = cuts.iter().copied().filter(|&cut| leg.begin_s < cut && cut < leg.end_s);
             let mut begin_s = leg.begin_s;
             for end_s in inner.chain(std::iter::once(leg.end_s)) {
-                fit_against(leg, &window, (begin_s, end_s), &limit, &mut curves);
+                fit(leg, &through, (begin_s, end_s), &mut curves);
                 begin_s = end_s;
             }
         }
@@ -49,9 +59,31 @@ impl Trace {
     /// The Sun's elevation beneath the aircraft.
     pub fn beneath(path: &Path, sky: &Sky) -> Self {
         let window = sky.window(path.takeoff, path.landing());
+        Self::fitted(path, |leg, (begin_s, end_s)| {
+            let band = band(leg);
+            Curve::through(begin_s, end_s, band, |t| sine_of_elevation(leg.normal(t), &window.at(t)))
+        })
+    }
+
+    /// The Moon beneath the aircraft: the sine of its elevation less that of the limit at which it rises and sets, which
+    /// drifts by a few seconds of arc in a flight. The level at which it rises and sets is therefore 0.
+    pub fn moon_beneath(path: &Path, sky: &Sky) -> Self {
+        let window = sky.moon_window(path.takeoff, path.landing());
+        Self::fitted(path, |leg, span| {
+            let near = Near::new(band_of(leg, MOON_RAD_S));
+            Curve::through_near(span, near, |t| {
+                let moon = window.at(t);
+                sine_of_elevation(leg.normal(t), &moon) - moon.sine_of_rise_limit()
+            })
+        })
+    }
+
+    /// The curves of all legs, each made by `through`.
+    #[inline]
+    fn fitted(path: &Path, through: impl Fn(&Leg, (f64, f64)) -> Option<Curve>) -> Self {
         let mut curves = Vec::with_capacity(path.legs().len());
         for leg in path.legs() {
-            fit(leg, &window, (leg.begin_s, leg.end_s), &mut curves);
+            fit(leg, &through, (leg.begin_s, leg.end_s), &mut curves);
         }
         let peaks = peaks(&curves, path);
         Self { curves, peaks }
@@ -81,39 +113,27 @@ impl Trace {
 
 /// How fast the Sun and the vertical turn on a leg.
 pub(super) fn band(leg: &Leg) -> Bandwidth {
-    Bandwidth { body_rad_s: TRUE_SUN * MEAN_SUN_RAD_S, path_rad_s: leg.speed_m_s() / wgs84::R_MIN_M }
+    band_of(leg, TRUE_SUN * MEAN_SUN_RAD_S)
+}
+
+/// How fast a body and the vertical turn on a leg.
+fn band_of(leg: &Leg, body_rad_s: f64) -> Bandwidth {
+    Bandwidth { body_rad_s, path_rad_s: leg.speed_m_s() / wgs84::R_MIN_M }
 }
 
 /// Appends the curves of a leg: one, or those of its halves where one polynomial would need too many nodes.
-fn fit(leg: &Leg, window: &SunWindow<'_>, span: (f64, f64), curves: &mut Vec<Curve>) {
-    let sine = |t: Four| sine_of_elevation(leg.normal(t), &window.at(t));
-    if let Some(curve) = Curve::through(span.0, span.1, band(leg), sine) {
-        curves.push(curve);
-    } else {
-        let middle = f64::midpoint(span.0, span.1);
-        fit(leg, window, (span.0, middle), curves);
-        fit(leg, window, (middle, span.1), curves);
-    }
-}
-
-/// Appends the curves of one stretch of a leg against a changing limit.
-fn fit_against(
+fn fit(
     leg: &Leg,
-    window: &SunWindow<'_>,
+    through: &impl Fn(&Leg, (f64, f64)) -> Option<Curve>,
     span: (f64, f64),
-    limit: &impl Fn(f64) -> Angle,
     curves: &mut Vec<Curve>,
 ) {
-    let gap = |t: Four| {
-        let limits = Four::from(t.to_array().map(|t| limit(t).rad().sin()));
-        sine_of_elevation(leg.normal(t), &window.at(t)) - limits
-    };
-    if let Some(curve) = Curve::through_at_least_16(span.0, span.1, band(leg), gap) {
+    if let Some(curve) = through(leg, span) {
         curves.push(curve);
     } else {
         let middle = f64::midpoint(span.0, span.1);
-        fit_against(leg, window, (span.0, middle), limit, curves);
-        fit_against(leg, window, (middle, span.1), limit, curves);
+        fit(leg, through, (span.0, middle), curves);
+        fit(leg, through, (middle, span.1), curves);
     }
 }
 

@@ -2,6 +2,13 @@
 
 use crate::Brief;
 
+/// What the brightness is.
+pub(super) const OUTSIDE: &str = "Light of Sun, Moon and night sky outside, on level ground beneath the aircraft under a clear \
+    sky; cloud takes much of it away, and it is neither the light aloft nor that on a flight deck.";
+/// What the brightness inside is.
+pub(super) const INSIDE: &str =
+    "the light outside times factors that are the user's own; no window or seat was modelled or measured.";
+
 /// The cautions of a brief, one sentence each.
 pub(super) fn cautions(brief: &Brief) -> Vec<String> {
     let mut cautions = general();

@@ -1,11 +1,13 @@
 //! A brief's minutes as CSV: one row each, RFC 4180 with a header.
 
+use super::record::figures;
 use crate::Brief;
 use crate::label::clock::machine;
 use crate::label::words::state_key;
-use crate::light::Sample;
+use crate::light::{MoonSample, Sample};
 
-const HEADER: [&str; 12] = [
+const COLUMNS: usize = 16;
+const HEADER: [&str; COLUMNS] = [
     "flight",
     "time_utc",
     "lat_deg",
@@ -18,6 +20,10 @@ const HEADER: [&str; 12] = [
     "declination_deg",
     "gha_deg",
     "state",
+    "moon_elevation_deg",
+    "moon_azimuth_deg",
+    "moon_illuminated",
+    "illuminance_lux",
 ];
 
 /// The minutes of each brief, one after another under one header.
@@ -29,15 +35,16 @@ pub fn csv(briefs: &[Brief]) -> Result<String, csv::Error> {
     writer.write_record(HEADER)?;
     for brief in briefs {
         let name = no_formula(&super::one_line(&brief.flight.name));
-        for sample in &brief.minutes {
-            writer.write_record(row(&name, brief, sample))?;
+        let minutes = brief.minutes.iter().zip(&brief.moon.minutes).zip(&brief.exposure.minutes);
+        for ((sample, moon), lux) in minutes {
+            writer.write_record(row(&name, brief, sample).iter().chain(&moonlight(moon, lux.0)))?;
         }
     }
     let bytes = writer.into_inner().map_err(csv::IntoInnerError::into_error)?;
     Ok(String::from_utf8_lossy(&bytes).into_owned())
 }
 
-fn row(name: &str, brief: &Brief, sample: &Sample) -> [String; 12] {
+fn row(name: &str, brief: &Brief, sample: &Sample) -> [String; COLUMNS - 4] {
     let place = sample.position.place;
     [
         name.to_string(),
@@ -52,6 +59,17 @@ fn row(name: &str, brief: &Brief, sample: &Sample) -> [String; 12] {
         fixed(sample.declination.deg(), 5),
         fixed(sample.gha.deg(), 5),
         state_key(sample.state).to_string(),
+    ]
+}
+
+/// The columns that came later: the Moon and the brightness outside.
+fn moonlight(moon: &MoonSample, lux: f64) -> [String; 4] {
+    [
+        fixed(moon.elevation.0.deg(), 5),
+        fixed(moon.azimuth.deg(), 3),
+        fixed(moon.phase.illuminated, 4),
+        // five figures: daylight and starlight are eight powers of ten apart
+        format!("{}", figures(lux)),
     ]
 }
 

@@ -52,6 +52,18 @@ impl<L: Lane> Body<L> for MoonPlace<L> {
     }
 }
 
+impl<L: Lane> MoonPlace<L> {
+    /// The sine of [`MoonPlace::rise_limit`].
+    #[inline]
+    pub fn sine_of_rise_limit(&self) -> L {
+        // −sin(refraction + semidiameter), the semidiameter's sine being the radius over the distance
+        let sin = L::splat(RADIUS_AU) / self.distance_au;
+        let cos = (L::splat(1.0) - sin * sin).root();
+        let [sin_34, cos_34] = [HORIZONTAL_REFRACTION.rad().sin(), HORIZONTAL_REFRACTION.rad().cos()];
+        L::splat(-sin_34) * cos - L::splat(cos_34) * sin
+    }
+}
+
 impl MoonPlace {
     /// Declination, north positive.
     pub fn declination(&self) -> Angle {
@@ -148,6 +160,15 @@ mod tests {
             }
         }
         assert_eq!((quarters, changes), (2, 2));
+    }
+
+    #[test]
+    fn the_sine_of_the_rise_limit_is_the_limits_sine() {
+        let sky = Sky::default();
+        for day in 0..28 {
+            let moon = sky.moon_at(Instant::from_seconds(8.5e8 + f64::from(day) * 86_400.0));
+            assert!((moon.sine_of_rise_limit() - moon.rise_limit().0.rad().sin()).abs() < 1e-15);
+        }
     }
 
     #[test]

@@ -2,6 +2,7 @@
 
 mod aerodrome;
 mod batch;
+mod brightness;
 mod forms;
 mod hostile;
 mod raw;

@@ -72,7 +72,7 @@ fn a_disk_that_fills_up_leaves_no_file_behind() {
     let folder = folder(&[("a.toml", FLIGHT)]);
     std::fs::create_dir(folder.path().join("out")).unwrap();
     let script = format!(
-        "trap '' XFSZ; ulimit -f 8; exec '{}' brief a.toml --out out",
+        "trap '' XFSZ; ulimit -f 32; exec '{}' brief a.toml --out out",
         env!("CARGO_BIN_EXE_gloamline")
     );
     let output = std::process::Command::new("bash").args(["-c", &script]).current_dir(folder.path()).output();

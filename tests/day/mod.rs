@@ -18,13 +18,8 @@ static SKY: LazyLock<Sky> = LazyLock::new(Sky::default);
 /// A place that keeps a zone's clock, or local mean time.
 fn stop(lat: f64, lon: f64, zone: Option<&str>) -> Stop {
     let zone = zone.map(|name| name.parse().unwrap());
-    Stop {
-        label: "here".into(),
-        name: None,
-        place: Place::from_deg(lat, lon).unwrap(),
-        zone,
-        aerodrome: None,
-    }
+    let place = Place::from_deg(lat, lon).unwrap();
+    Stop { label: "here".into(), name: None, place, zone, aerodrome: None }
 }
 
 /// The days of a place from one date to another.

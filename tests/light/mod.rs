@@ -3,9 +3,11 @@
 mod ahead;
 mod crossings;
 mod deck;
-mod trust;
+mod exposure;
 mod grazing;
+mod moon;
 mod properties;
+mod trust;
 
 use crate::tables::{Row, instant, number, rows};
 use gloamline::intake::{Flight, RoutePoint, Stop};
@@ -32,6 +34,7 @@ pub(crate) fn flight(name: &str, takeoff: gloamline::units::Instant, points: &[(
         waypoints: waypoints.collect(),
         polar_limits: None,
         dut1: None,
+        brightness: gloamline::intake::Brightness::default(),
         low_sun: None,
         from_air: None,
         to_air: None,

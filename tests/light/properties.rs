@@ -9,7 +9,7 @@ use gloamline::units::{Instant, Place};
 use proptest::prelude::*;
 use std::sync::LazyLock;
 
-static SKY: LazyLock<Sky> = LazyLock::new(Sky::default);
+pub(crate) static SKY: LazyLock<Sky> = LazyLock::new(Sky::default);
 
 /// The curve in place of the sine of elevation, and the last bits of the sampling itself.
 const CURVE: f64 = 2e-9 + 1e-12;
@@ -67,7 +67,7 @@ fn timed(first: Place, steps: &[Step]) -> Vec<(Place, f64)> {
 }
 
 /// Two points or more, one step in ten a holding.
-pub(super) fn any_flight() -> impl Strategy<Value = Flight> {
+pub(crate) fn any_flight() -> impl Strategy<Value = Flight> {
     let steps = prop_oneof![prop::collection::vec(step(), 1), prop::collection::vec(step(), 2..8)];
     (takeoff(), place(), steps)
         .prop_map(|(takeoff, first, steps)| (takeoff, timed(first, &steps)))
@@ -172,7 +172,7 @@ fn assert_same_crossings(path: &Path, one: &Light, other: &Light) {
 }
 
 /// The flight's points with their seconds.
-fn points_of(path: &Path) -> Vec<(Place, f64)> {
+pub(crate) fn points_of(path: &Path) -> Vec<(Place, f64)> {
     let first = (path.legs()[0].from, 0.0);
     std::iter::once(first).chain(path.legs().iter().map(|leg| (leg.to, leg.end_s))).collect()
 }

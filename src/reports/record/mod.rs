@@ -5,6 +5,10 @@ mod aloft;
 mod alternates;
 mod beneath;
 mod flight;
+mod illuminance;
+mod moon;
+
+pub(super) use illuminance::figures;
 
 use crate::Brief;
 use crate::label::clock::machine;
@@ -22,6 +26,8 @@ pub(super) struct Record {
     beneath: beneath::BeneathRecord,
     #[serde(skip_serializing_if = "Option::is_none")]
     aloft: Option<aloft::AloftRecord>,
+    moon: moon::MoonRecord,
+    illuminance: illuminance::IlluminanceRecord,
     low_sun: Vec<ahead::LowSunRecord>,
     low_sun_limits: ahead::LowSunLimitsRecord,
     runways: [ahead::RunwaysRecord; 2],
@@ -56,6 +62,8 @@ impl Record {
             flight: flight::FlightRecord::of(brief),
             beneath: beneath::BeneathRecord::of(brief),
             aloft: brief.deck.as_ref().map(|view| aloft::AloftRecord::of(brief, view)),
+            moon: moon::MoonRecord::of(brief),
+            illuminance: illuminance::IlluminanceRecord::of(brief),
             low_sun: ahead::low_sun(brief),
             low_sun_limits: ahead::LowSunLimitsRecord::of(brief),
             runways: ahead::runways(brief),

@@ -4,6 +4,8 @@ pub(super) mod format;
 mod head;
 mod beneath;
 mod aloft;
+mod moon;
+mod brightness;
 mod ahead;
 mod alternates;
 mod route;
@@ -24,6 +26,8 @@ pub fn text(brief: &Brief) -> String {
         beneath::crossings(brief),
         beneath::touches(brief),
         aloft::deck(brief),
+        moon::moon(brief),
+        brightness::brightness(brief),
         ahead::low_sun(brief),
         ahead::runways(brief),
         alternates::alternates(brief),

@@ -8,12 +8,11 @@ from datetime import timedelta
 from math import cos, radians
 from pathlib import Path
 
-from sky import EARTH, KERNEL, SUN, iso, time_at, utc, wgs84, write_table
+from sky import EARTH, MOON, SUN, iso, time_at, utc, wgs84, write_table
 from sun_places import place
 
 SEED = 20261202
 ROWS = 360
-MOON = KERNEL["moon"]
 COLUMNS = [
     "utc", "lat_deg", "lon_deg", "declination_deg", "gha_deg", "distance_km", "elevation_deg", "azimuth_deg",
     "elongation_deg", "phase_angle_deg", "illuminated",

@@ -1,4 +1,4 @@
-"""The Sun as skyfield and DE421 give it, with UT1 equal to UTC and no polar motion.
+"""The Sun and the Moon as skyfield and DE421 give them, with UT1 equal to UTC and no polar motion.
 
 It does not know of flights or files other than the ephemeris, reads no clock and needs no network.
 """
@@ -30,7 +30,7 @@ NODE_S = 600.0
 MARGIN_S = 3600.0
 
 KERNEL = load_file(str(Path(skyfield_data.get_skyfield_data_path()) / "de421.bsp"))
-SUN, EARTH = KERNEL["sun"], KERNEL["earth"]
+SUN, EARTH, MOON = KERNEL["sun"], KERNEL["earth"], KERNEL["moon"]
 
 _builtin = load.timescale(builtin=True)
 LEAP_JD, LEAP_S = np.array(_builtin.leap_dates), np.array(_builtin.leap_offsets)
@@ -71,15 +71,15 @@ def time_at(instant):
     return times(midnight, (instant - midnight) / timedelta(seconds=1))
 
 
-def geocentric(t):
-    """Apparent geocentric Sun: light time and aberration, no bending of light."""
-    return EARTH.at(t).observe(SUN).apparent(deflectors=())
+def geocentric(t, body=SUN):
+    """Apparent geocentric Sun or other body: light time and aberration, no bending of light."""
+    return EARTH.at(t).observe(body).apparent(deflectors=())
 
 
-def topocentric(t, lat_deg, lon_deg):
-    """Apparent Sun for an observer at height 0 on WGS84; skyfield adds the Earth's own bending, at most 0.0006 arcsec."""
+def topocentric(t, lat_deg, lon_deg, body=SUN):
+    """Apparent Sun or other body for an observer at height 0 on WGS84; skyfield adds the Earth's own bending, at most 0.0006 arcsec."""
     observer = EARTH + wgs84.latlon(lat_deg, lon_deg, elevation_m=0.0)
-    return observer.at(t).observe(SUN).apparent(deflectors=())
+    return observer.at(t).observe(body).apparent(deflectors=())
 
 
 def ecliptic_longitude_deg(t):
@@ -99,15 +99,15 @@ def _turned(vector, angle):
 
 
 class SunTrack:
-    """Earth-fixed geocentric Sun and its aberration over a span, splined in axes that turn with the mean Sun."""
+    """Earth-fixed geocentric Sun, or other body, and its aberration over a span, splined in axes that turn with the mean Sun."""
 
-    def __init__(self, start, span_s):
+    def __init__(self, start, span_s, body=SUN):
         self.midnight = midnight_of(start)
         first = (start - self.midnight) / timedelta(seconds=1) - MARGIN_S
         nodes = np.arange(first, first + span_s + 2 * MARGIN_S + NODE_S, NODE_S)
         t = times(self.midnight, nodes)
-        seen = geocentric(t).frame_xyz(itrs).au
-        unaberrated = EARTH.at(t).observe(SUN).frame_xyz(itrs).au
+        seen = geocentric(t, body).frame_xyz(itrs).au
+        unaberrated = EARTH.at(t).observe(body).frame_xyz(itrs).au
         shift = seen / np.linalg.norm(seen, axis=0) - unaberrated / np.linalg.norm(unaberrated, axis=0)
         slow = [_turned(vector, -2 * np.pi * nodes / DAY_S) for vector in (unaberrated, shift)]
         self.splines = [make_interp_spline(nodes, vector.T, k=5) for vector in slow]
