@@ -5,7 +5,6 @@ use crate::intake::LowSunLimits;
 use crate::light::{AheadSpan, Light, Sector, State, Trace, Watch, ahead};
 use crate::path::Path;
 use crate::sky::{ApparentElevation, Sky};
-use crate::units::Metres;
 
 impl Brief {
     /// Seconds in which a low Sun stands ahead, and in which it is strong.
@@ -30,8 +29,7 @@ pub(super) fn spans(
         let shown = light.segments.iter().filter(|segment| segment.state == State::Daylight);
         shown.map(|segment| (segment.begin_s, segment.end_s)).collect()
     };
-    let height = deck.map_or(Metres(0.0), |view| view.deck.height);
     let sector =
         Sector { half_width: limits.sector, strong: limits.strong, up_to: ApparentElevation(limits.up_to) };
-    ahead(trace, path, sky, &Watch { height, visible: &visible, sector })
+    ahead(trace, path, sky, &Watch { visible: &visible, sector })
 }

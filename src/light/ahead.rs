@@ -23,8 +23,8 @@ use super::span::{Span, common, follows, not_above, not_negative};
 use super::trace::{Trace, band};
 use crate::path::{Leg, Path};
 use crate::sky::{
-    ApparentElevation, GeometricElevation, Sky, SunWindow, apparent_aloft, elevation, geometric_aloft,
-    level_part,
+    ApparentElevation, GeometricElevation, SeenAt, Sky, SunWindow, apparent_aloft, elevation,
+    geometric_aloft, level_part,
 };
 use crate::units::{Angle, Four, Metres, Place};
 
@@ -68,11 +68,9 @@ pub struct AheadSpan {
     pub strong: Vec<(f64, f64)>,
 }
 
-/// From where the Sun is looked for, and when it shows.
+/// What is looked for, and when the Sun shows.
 #[derive(Debug, Clone, Copy)]
 pub struct Watch<'a> {
-    /// The height of the eye.
-    pub height: Metres,
     /// When the Sun is above the horizon, in seconds from take-off, in order.
     pub visible: &'a [(f64, f64)],
     /// What counts.
@@ -83,14 +81,13 @@ pub struct Watch<'a> {
 ///
 /// # Accuracy
 /// Edges within 0.05 s of the model's own where the bearing changes by a degree a minute, and none missed that lasts: see
-/// the file's head. While holding over one point no direction is ahead.
+/// the file's head. In a climb through the tropopause the upper edge's elevation is held to 1″. While holding over one point no direction is ahead.
 pub fn ahead(trace: &Trace, path: &Path, sky: &Sky, watch: &Watch<'_>) -> Vec<AheadSpan> {
-    let highest = geometric_aloft(watch.sector.up_to, watch.height).0.rad().sin();
-    let low = common(watch.visible, &not_above(trace, highest));
+    let low = common(watch.visible, &low_enough(trace, path, sky, watch.sector.up_to));
     let window = sky.window(path.takeoff, path.landing());
     let mut found: Vec<AheadSpan> = Vec::new();
     for leg in path.legs().iter().filter(|leg| leg.length_m() > 0.0) {
-        let view = View { leg, window: &window, watch };
+        let view = View { path, leg, window: &window, sector: &watch.sector };
         for span in common(&low, &[(leg.begin_s, leg.end_s)]) {
             for part in view.within(span, watch.sector.half_width) {
                 append(&mut found, view.part(part));
@@ -114,11 +111,31 @@ fn append(found: &mut Vec<AheadSpan>, part: AheadSpan) {
     }
 }
 
+/// When the Sun is seen no higher than a limit, from the height flown, or from sea level where none is known.
+fn low_enough(trace: &Trace, path: &Path, sky: &Sky, up_to: ApparentElevation) -> Vec<Span> {
+    match &path.heights {
+        Some(heights) if !heights.is_level() => {
+            // the limit has a kink where the height passes the standard air's
+            let mut cuts: Vec<f64> = heights.bends_s().chain(heights.passes_s(SeenAt::KINK)).collect();
+            cuts.sort_by(f64::total_cmp);
+            let seen = SeenAt::new(up_to);
+            not_above(&Trace::against(path, sky, &cuts, |at_s| seen.geometric(heights.at(at_s)).0), 0.0)
+        }
+        _ => not_above(trace, geometric_aloft(up_to, eye(path, 0.0)).0.rad().sin()),
+    }
+}
+
+/// The height from which the Sun is looked at.
+fn eye(path: &Path, at_s: f64) -> Metres {
+    path.heights.as_ref().map_or(Metres(0.0), |heights| heights.at(at_s))
+}
+
 /// The view along one leg.
 struct View<'a> {
+    path: &'a Path,
     leg: &'a Leg,
     window: &'a SunWindow<'a>,
-    watch: &'a Watch<'a>,
+    sector: &'a Sector,
 }
 
 impl View<'_> {
@@ -146,7 +163,7 @@ impl View<'_> {
             begin,
             end,
             least_bearing: self.least_bearing(span, begin.relative_bearing, end.relative_bearing),
-            strong: self.within(span, self.watch.sector.strong),
+            strong: self.within(span, self.sector.strong),
         }
     }
 
@@ -157,7 +174,7 @@ impl View<'_> {
         SunAhead {
             at_s,
             elevation,
-            apparent: apparent_aloft(elevation, self.watch.height),
+            apparent: apparent_aloft(elevation, eye(self.path, at_s)),
             relative_bearing: Angle::from_rad(part(frame.right).atan2(part(frame.ahead))),
         }
     }

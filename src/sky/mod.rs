@@ -12,6 +12,7 @@ mod moon;
 mod observer;
 mod horizon;
 mod refraction;
+mod seen_at;
 mod almanac;
 mod illuminance;
 mod year;
@@ -26,6 +27,7 @@ pub use refraction::{
     ApparentElevation, GroundAir, HORIZONTAL_REFRACTION, apparent_aloft, apparent_from_ground,
     geometric_aloft,
 };
+pub use seen_at::SeenAt;
 pub use sun::SunPlace;
 pub use table::{MoonWindow, Sky, SunWindow};
 pub use year::{YearEvent, YearMoment, year_moments};

@@ -1,10 +1,10 @@
 //! Low Sun ahead along any flight, held against looking every second by azimuth, track and apparent elevation.
 
 use super::properties::any_flight;
-use gloamline::intake::Flight;
+use gloamline::intake::{ClimbRates, Flight};
 use gloamline::light::{Abeam, AheadSpan, Deck, Light, State, abeam};
 use gloamline::path::Path;
-use gloamline::sky::{Sky, apparent_aloft, azimuth, elevation, geometric_aloft};
+use gloamline::sky::{ApparentElevation, Sky, apparent_aloft, azimuth, elevation, geometric_aloft};
 use gloamline::units::{Angle, Metres, Place};
 use gloamline::{Brief, brief};
 use proptest::prelude::*;
@@ -37,16 +37,23 @@ fn look(brief: &Brief, at_s: f64) -> Look {
     Look { elevation: elevation(position.place, &sun).0, bearing, visible }
 }
 
-fn height(brief: &Brief) -> Metres {
-    brief.flight.level.unwrap_or_default()
+fn height(brief: &Brief, at_s: f64) -> Metres {
+    brief.path.at(at_s).height.unwrap_or_default()
 }
 
-/// The geometric elevation at which the Sun is seen at the limit; the apparent one is checked against it.
-fn highest(brief: &Brief) -> Angle {
-    let limit = gloamline::sky::ApparentElevation(brief.low_sun_limits.up_to);
-    let geometric = geometric_aloft(limit, height(brief));
-    assert!((apparent_aloft(geometric, height(brief)).0 - limit.0).deg().abs() < 1e-6);
-    geometric.0
+/// What the series by height may err by where the flight climbs.
+fn series_rad(brief: &Brief) -> f64 {
+    if brief.path.heights.as_ref().is_some_and(|heights| !heights.is_level()) { 1e-7 } else { 0.0 }
+}
+
+/// How far the Sun is above the elevation at which it is seen at the limit, from the height flown then.
+fn above_highest(brief: &Brief, elevation: Angle, at_s: f64) -> Angle {
+    let limit = brief.low_sun_limits.up_to;
+    // a ray takes its time, and bends by less than two degrees
+    if (elevation - limit).deg().abs() > 2.5 {
+        return elevation - limit;
+    }
+    elevation - geometric_aloft(ApparentElevation(limit), height(brief, at_s)).0
 }
 
 fn spans_hold(spans: impl IntoIterator<Item = (f64, f64)>, at_s: f64) -> bool {
@@ -68,16 +75,17 @@ fn horizon_crossings(light: &Light, deck: Option<&Deck>) -> Vec<f64> {
 
 /// Looks every second; what differs from the spans must lie at an edge.
 fn assert_looking_agrees(brief: &Brief) {
-    let (limits, highest) = (brief.low_sun_limits, highest(brief));
+    let limits = brief.low_sun_limits;
     let crossings = horizon_crossings(&brief.light, brief.deck.as_ref().map(|view| &view.deck));
     for second in 0..brief.path.airborne_s as u32 {
         let at_s = f64::from(second);
         let seen = look(brief, at_s);
         let slack = (CURVE_RAD + ANGLES_RAD) / seen.elevation.rad().cos();
-        let low = seen.visible && seen.elevation.rad() <= highest.rad() && !is_holding(&brief.path, at_s);
+        let above = above_highest(brief, seen.elevation, at_s).rad();
+        let low = seen.visible && above <= 0.0 && !is_holding(&brief.path, at_s);
         let at_edge = |width: Angle| {
             (seen.bearing.rad().abs() - width.rad()).abs() < slack
-                || (seen.elevation - highest).rad().abs() < slack
+                || above.abs() < slack + series_rad(brief)
                 || crossings.iter().any(|t| (t - at_s).abs() < ROOT_S)
                 || brief.path.legs().iter().any(|leg| (leg.end_s - at_s).abs() < 0.01)
         };
@@ -98,16 +106,17 @@ fn assert_looking_agrees(brief: &Brief) {
 fn assert_edges_are_edges(brief: &Brief) {
     let path = &brief.path;
     let crossings = horizon_crossings(&brief.light, brief.deck.as_ref().map(|view| &view.deck));
-    let highest = highest(brief);
     for sun in brief.low_sun.iter().flat_map(|span| [span.begin, span.end]) {
         let slack = (CURVE_RAD + ANGLES_RAD) / sun.elevation.0.rad().cos();
         let at_join = std::iter::once(0.0).chain(path.legs().iter().map(|leg| leg.end_s));
         let is_edge = (sun.relative_bearing.rad().abs() - brief.low_sun_limits.sector.rad()).abs() < slack
-            || (sun.elevation.0 - highest).rad().abs() < slack
+            || above_highest(brief, sun.elevation.0, sun.at_s).rad().abs() < slack + series_rad(brief)
             || crossings.iter().any(|t| (t - sun.at_s).abs() < ROOT_S)
             || at_join.into_iter().any(|t| (t - sun.at_s).abs() < 0.01);
         assert!(is_edge, "{sun:?} is no edge");
-        assert!((apparent_aloft(sun.elevation, height(brief)).0 - sun.apparent.0).deg().abs() < 1e-9);
+        assert!(
+            (apparent_aloft(sun.elevation, height(brief, sun.at_s)).0 - sun.apparent.0).deg().abs() < 1e-9
+        );
     }
     for pair in brief.low_sun.windows(2) {
         assert!(pair[0].end.at_s < pair[1].begin.at_s);
@@ -128,13 +137,19 @@ fn assert_least_is_least(brief: &Brief) {
     }
 }
 
-fn with_options(flight: Flight, level_ft: Option<f64>, (sector, strong, up_to): (f64, f64, f64)) -> Brief {
+/// A level and whether it is climbed to.
+type Level = Option<(f64, bool)>;
+
+fn with_options(flight: Flight, level: Level, (sector, strong, up_to): (f64, f64, f64)) -> Brief {
     let limits = gloamline::intake::LowSunLimits {
         sector: Angle::from_deg(sector),
         strong: Angle::from_deg(strong.min(sector)),
         up_to: Angle::from_deg(up_to),
     };
-    let flight = Flight { level: level_ft.map(Metres::from_feet), low_sun: Some(limits), ..flight };
+    let rates = ClimbRates { climb: Metres::from_feet(1500.0), descent: Metres::from_feet(1800.0) };
+    let climb = level.filter(|level| level.1).map(|_| rates);
+    let level = level.map(|level| Metres::from_feet(level.0));
+    let flight = Flight { level, climb, low_sun: Some(limits), ..flight };
     brief(flight, &SKY).unwrap()
 }
 
@@ -166,12 +181,12 @@ proptest! {
     #[test]
     fn a_low_sun_ahead_is_where_looking_every_second_finds_it(
         flight in any_flight(),
-        level_ft in prop::option::of(500.0..45_000.0),
+        level in prop::option::of((500.0..45_000.0, prop::bool::ANY)),
         sector in 3.0..90.0,
         strong in 1.0..20.0,
         up_to in 1.0..50.0,
     ) {
-        let brief = with_options(flight, level_ft, (sector, strong, up_to));
+        let brief = with_options(flight, level, (sector, strong, up_to));
         assert_looking_agrees(&brief);
         assert_edges_are_edges(&brief);
         assert_least_is_least(&brief);
@@ -189,7 +204,7 @@ proptest! {
 fn the_reference_flights_have_low_suns_ahead_where_looking_finds_them() {
     let mut found = 0;
     for (_, flight) in super::reference_flights().into_iter().step_by(6) {
-        let brief = with_options(flight, Some(36_000.0), (25.0, 10.0, 15.0));
+        let brief = with_options(flight, Some((36_000.0, true)), (25.0, 10.0, 15.0));
         assert_looking_agrees(&brief);
         assert_edges_are_edges(&brief);
         assert_least_is_least(&brief);
