@@ -164,9 +164,12 @@ fn climb_rates(
         (Some(climb), Some(descent)) if has_level => (climb, descent),
         (Some(rate), _) | (_, Some(rate)) => return Err((rate.origin, Problem::HalfAClimb)),
     };
-    let metres = |rate: &Given<f64>| match RATES_FT_MIN.contains(&rate.value) {
-        true => Ok(Metres::from_feet(rate.value)),
-        false => Err((rate.origin.clone(), Problem::ClimbRate(rate.value))),
+    let metres = |rate: &Given<f64>| {
+        if RATES_FT_MIN.contains(&rate.value) {
+            Ok(Metres::from_feet(rate.value))
+        } else {
+            Err((rate.origin.clone(), Problem::ClimbRate(rate.value)))
+        }
     };
     Ok(Some(ClimbRates { climb: metres(&climb)?, descent: metres(&descent)? }))
 }

@@ -146,7 +146,8 @@ fn with_options(flight: Flight, level: Level, (sector, strong, up_to): (f64, f64
         strong: Angle::from_deg(strong.min(sector)),
         up_to: Angle::from_deg(up_to),
     };
-    let rates = ClimbRates { climb: Metres::from_feet(1500.0), descent: Metres::from_feet(1800.0) };
+    // so slow that most of the flight is climb and descent
+    let rates = ClimbRates { climb: Metres::from_feet(150.0), descent: Metres::from_feet(180.0) };
     let climb = level.filter(|level| level.1).map(|_| rates);
     let level = level.map(|level| Metres::from_feet(level.0));
     let flight = Flight { level, climb, low_sun: Some(limits), ..flight };
