@@ -14,11 +14,15 @@
 //! * the square root stays away from 0 by √(1 − q), all of it is analytic, and |dσ/dt| ≤ 1.158 v/b;
 //! * |Im ψ| ≤ 2 f Y, which stretches n by at most e^0.017;
 //! * the vector (cos σ, …) is no longer than √cosh(2 Im σ) / (1 − f) ≤ e^|Im σ| / (1 − f);
-//! * u is stretched by at most e^(ω |Im t|); its slow drift (a degree a day) and the parallax (4.3e−5 of the whole)
-//!   add less than 1 %.
+//! * u is stretched by at most e^(ω |Im t|); its slow drift (a degree a day) adds less than 1 %.
 //!
-//! Together `M ≤ 1.2 e^(h (z_s + 1.158 z_p))` with h = (ρ − 1/ρ)/2, `z_s = ωT/2`, `z_p = vT/(2b)`, for each ρ with
-//! `1.158 z_p h ≤ Y`. The bound below takes the best such ρ. A body as near as the Moon has a bound of its own, in
+//! Together `M ≤ 1.2 e^(h z)` with h = (ρ − 1/ρ)/2, `z = z_s + 1.158 z_p`, `z_s = ωT/2`, `z_p = vT/(2b)`, for each ρ with
+//! `1.158 z_p h ≤ Y`. The bound below takes the best such ρ.
+//!
+//! What is searched has the parallax in it, which turns twice as fast: (n·u − n·P/d)/√(1 + x) with
+//! x = P·P/d² − 2 u·P/d and |P|/d ≤ 4.4e−5 on the real axis. In the strip |x| ≤ 1.1e−4 e^(h z), below 1/2 as long as
+//! h z ≤ 8, and |(1 + x)^(−1/2) − 1| ≤ 1.42 |x|: the difference from n·u is at most 3e−4 e^(2 h z), a second function with
+//! an ellipse of its own, whose error is added. A body as near as the Moon has a bound of its own, in
 //! [`super::near`].
 
 use super::nodes::{MAX_NODES, SIZES};
@@ -45,6 +49,10 @@ pub(super) const STRIP_SPEED: f64 = 1.158;
 pub(super) const STRIP: f64 = 2.5;
 /// The factors of M that do not grow with the ellipse.
 const CONSTANT: f64 = 4.0 * 1.2;
+/// The largest exponent up to which a far body's parallax is expanded.
+const LOG_E_FAR: f64 = 8.0;
+/// The factor of its square in the parallax's bound, with that of the interpolation.
+const CONSTANT_FAR: f64 = 4.0 * 3e-4;
 /// What is asked of a curve: an interpolation error in sine of elevation below 0.0004″.
 pub(super) const TARGET: f64 = 2e-9;
 
@@ -53,7 +61,8 @@ pub fn error_bound(n: usize, band: Bandwidth, seconds: f64) -> f64 {
     let half = seconds / 2.0;
     let path = (STRIP_SPEED * band.path_rad_s * half).max(1e-12);
     let z = (band.body_rad_s * half + path).max(1e-9);
-    on_ellipse(n, z, STRIP / path, CONSTANT)
+    let strip = STRIP / path;
+    on_ellipse(n, z, strip, CONSTANT) + on_ellipse(n, 2.0 * z, strip.min(LOG_E_FAR / z), CONSTANT_FAR)
 }
 
 /// `constant` e^(h z) ρ^−(n−1) / (ρ − 1) on the best ellipse whose h is no larger than `h_cap`.

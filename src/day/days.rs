@@ -91,7 +91,7 @@ fn day_here(stop: &Stop, civil: CivilDay, (clock, sky): (Clock, &Sky)) -> DayHer
         transits: transits(stop.place.lon, &civil, sky).into_iter().map(|at_s| lookout.at(at_s)).collect(),
         highest: lookout.at(light.highest.at_s),
         lowest: lookout.at(light.lowest.at_s),
-        moon: moon_day(stop.place, &civil, (clock, sky)),
+        moon: moon_day((&path, &light), &civil, (clock, sky)),
         polar: None,
         civil,
         light,

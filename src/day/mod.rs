@@ -13,6 +13,6 @@ mod field;
 pub use clock::{CivilDay, Clock};
 pub use days::{DayHere, PlaceDays, place_days};
 pub use field::{Column, Field, Gap, Interval, field};
-pub use moon::{MoonDay, MoonEvent};
+pub use moon::MoonDay;
 pub use polar::{Polar, PolarKind};
 pub use range::{DayRange, LONGEST_DAYS, RangeError};
