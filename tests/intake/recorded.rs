@@ -1,0 +1,1 @@
+//! A flight as it was recorded.
