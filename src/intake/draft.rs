@@ -9,7 +9,7 @@ use crate::units::{Dut1, Instant, Metres};
 use std::ops::RangeInclusive;
 
 /// The longest time in the air that is taken for a flight: a day and a half.
-const LONGEST_H: f64 = 36.0;
+pub(super) const LONGEST_H: f64 = 36.0;
 /// The levels that aircraft fly at.
 const LEVELS_FT: RangeInclusive<f64> = 0.0..=60_000.0;
 /// The heights that cloud tops or terrain can raise a horizon to: up to the tropopause of the standard atmosphere.
@@ -72,7 +72,7 @@ pub(super) struct Draft {
 }
 
 /// RFC 3339 in UTC to the second, for messages.
-fn said(instant: Instant) -> String {
+pub(super) fn said(instant: Instant) -> String {
     instant.utc().format("%Y-%m-%dT%H:%M:%SZ").to_string()
 }
 

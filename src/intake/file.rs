@@ -72,7 +72,7 @@ pub fn flight_file(text: &str, source_name: &str) -> Result<Flight, IntakeError>
     draft.checked()
 }
 
-fn line_and_column(text: &str, byte: usize) -> Origin {
+pub(super) fn line_and_column(text: &str, byte: usize) -> Origin {
     let before = text.get(..byte).unwrap_or(text);
     let line = before.matches('\n').count() + 1;
     let column = before.rsplit('\n').next().map_or(0, |tail| tail.chars().count()) + 1;

@@ -1,4 +1,4 @@
-//! Flight files and coordinate notations, turned into a [`Flight`].
+//! Flight files, coordinate notations and recorded tracks, turned into a [`Flight`] or into [`Tracks`].
 //!
 //! Is given text and the name of its source; never opens a file. What needs a geodesic (speeds, a flight of no length)
 //! is checked where the geodesics are, in `path`.
@@ -12,6 +12,7 @@ mod time;
 mod draft;
 mod file;
 mod inline;
+mod track;
 
 pub use ahead::{Alternate, LowSunLimits, StationAir};
 pub use brightness::{Brightness, BrightnessError, lux_levels};
@@ -20,3 +21,7 @@ pub use file::flight_file;
 pub use flight::{ClimbRates, Flight, PolarLimits, RoutePoint, Stop};
 pub use inline::{Inline, date_argument, inline_flight, instant_argument, place_argument};
 pub use problem::{IntakeError, Problem};
+pub use track::{
+    Bridge, Columns, InputKind, Repair, Repairs, Track, TrackOptions, TrackPoint, TrackProblem, Tracks,
+    kind_of, plain, tracks,
+};

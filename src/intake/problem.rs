@@ -4,6 +4,7 @@ use super::ahead::{AIR_FIELDS, ALTERNATE_FIELDS, LOW_SUN_FIELDS};
 use super::brightness::BrightnessError;
 use super::draft::Origin;
 use super::file::{FIELDS, PLACE_FIELDS, POLAR_FIELDS, WAYPOINT_FIELDS};
+use super::track::TrackProblem;
 use crate::places::UnknownAerodrome;
 use crate::units::{Dut1Error, PlaceError, YEARS};
 
@@ -158,6 +159,9 @@ pub enum Problem {
     /// One rate without the other, or without a level.
     #[error("a rate of climb or descent stands alone")]
     HalfAClimb,
+    /// A recorded track that cannot be read.
+    #[error(transparent)]
+    Track(#[from] TrackProblem),
     /// A horizon no cloud or mountain makes.
     #[error("a horizon at {0} ft is outside 0 ft to 36000 ft")]
     Horizon(f64),
@@ -192,25 +196,31 @@ pub enum Problem {
 }
 
 /// A text as given, in quotes, cut short, with everything escaped that could act on a terminal.
-fn quoted(given: &str) -> String {
+pub(super) fn quoted(given: &str) -> String {
+    format!("'{}'", escaped(given, LONGEST_QUOTED))
+}
+
+/// A text cut to a number of letters, with everything escaped that could act on a terminal.
+pub(super) fn escaped(given: &str, longest: usize) -> String {
     let mut text = String::new();
-    for c in given.chars().take(LONGEST_QUOTED) {
+    for c in given.chars().take(longest) {
         if matches!(c, '\'' | '"') {
             text.push(c);
         } else {
             text.extend(c.escape_debug());
         }
     }
-    if given.chars().nth(LONGEST_QUOTED).is_some() {
+    if given.chars().nth(longest).is_some() {
         text.push('…');
     }
-    format!("'{text}'")
+    text
 }
 
 impl Problem {
     fn hint(&self) -> Option<String> {
         let text = match self {
             Self::UnknownAerodrome(unknown) => return unknown_place_hint(unknown),
+            Self::Track(problem) => return problem.hint(),
             Self::Coordinates(_) => "write 7830N02000W, 78N020W or 78.5,-20",
             Self::Instant(_) | Self::NoOffset(_) => {
                 "write 2026-12-18T05:10Z, or 2026-12-18T00:10-05:00 with an offset"
