@@ -36,8 +36,8 @@ pub(super) enum Form {
 #[command(after_help = "Times are RFC 3339 with an offset or Z; the seconds may be left out.\n\
     Exit codes: 0 all done, 1 some flights refused, 2 nothing done.")]
 pub(super) struct BriefRequest {
-    /// Flight files (TOML); - reads one from standard input
-    #[arg(value_name = "FLIGHT.toml", required_unless_present = "from")]
+    /// Flight files (TOML) or recordings (CSV, GPX, GeoJSON, KML), also in gzip; - reads one from standard input
+    #[arg(value_name = "FLIGHT", required_unless_present = "from")]
     pub(super) files: Vec<PathBuf>,
 
     #[command(flatten)]
@@ -50,6 +50,18 @@ pub(super) struct BriefRequest {
     /// Write NAME.txt, .json, .csv, .png and .svg for each flight into this folder
     #[arg(long, value_name = "DIR")]
     pub(super) out: Option<PathBuf>,
+
+    /// What the columns of recorded CSV mean, such as time=STAMP,lat=Y,lon=X,height=ALT:ft,flight=ID
+    #[arg(long, value_name = "MEANING=NAME,…")]
+    pub(super) columns: Option<String>,
+
+    /// The day (UTC) of a recording that has times of day only, such as 2026-12-18
+    #[arg(long, value_name = "DATE")]
+    pub(super) recorded_on: Option<String>,
+
+    /// Take a recording's latitudes for longitudes and its longitudes for latitudes
+    #[arg(long)]
+    pub(super) swap_lat_lon: bool,
 
     /// UT1 − UTC in seconds, for flight files that do not give it
     #[arg(long, value_name = "SECONDS", default_value_t = 0.0, allow_hyphen_values = true)]

@@ -5,8 +5,8 @@ use super::arguments::{BriefRequest, Form};
 use super::files::{self, Batch, FileError};
 use super::terminal;
 use gloamline::intake::{
-    BrightnessError, Flight, Inline, IntakeError, Origin, PolarLimits, Problem, flight_file, inline_flight,
-    lux_levels,
+    BrightnessError, Columns, Flight, Inline, InputKind, IntakeError, Origin, PolarLimits, Problem,
+    TrackOptions, date_argument, flight_file, inline_flight, kind_of, lux_levels, plain, tracks,
 };
 use gloamline::sky::Sky;
 use gloamline::units::{Dut1, Dut1Error, PlaceError};
@@ -115,19 +115,62 @@ fn flights(request: &BriefRequest) -> Vec<Result<(Flight, String), Refusal>> {
             inline_flight(&given).map(|flight| (flight, "the flight".to_string())).map_err(Refusal::from),
         ];
     }
-    request.files.iter().map(|path| read_flight(path)).collect()
+    request.files.iter().flat_map(|path| read_flights(path, request)).collect()
 }
 
-fn read_flight(path: &Path) -> Result<(Flight, String), Refusal> {
+/// The flights of a file: one of a flight file, or all of a recording, the kind told by content and ending.
+fn read_flights(path: &Path, request: &BriefRequest) -> Vec<Result<(Flight, String), Refusal>> {
     let source_name = files::source_name(path);
-    let bytes = files::read(path)?;
+    let bytes = match files::read(path) {
+        Ok(bytes) => bytes,
+        Err(error) => return vec![Err(error.into())],
+    };
+    match kind_of(&bytes, &source_name) {
+        None | Some(InputKind::Flight) => {
+            vec![planned(&bytes, &source_name).map(|flight| (flight, source_name)).map_err(Refusal::from)]
+        }
+        Some(_) => recorded(&bytes, &source_name, request),
+    }
+}
+
+fn planned(bytes: &[u8], source_name: &str) -> Result<Flight, IntakeError> {
+    let bytes = plain(bytes, source_name)?;
     let text = std::str::from_utf8(&bytes).map_err(|error| IntakeError {
-        source_name: source_name.clone(),
+        source_name: source_name.to_string(),
         origin: Origin::Whole,
         problem: Problem::NotText(error.valid_up_to()),
     })?;
     // a byte-order mark says nothing that UTF-8 does not
-    Ok((flight_file(text.trim_start_matches('\u{feff}'), &source_name)?, source_name))
+    flight_file(text.trim_start_matches('\u{feff}'), source_name)
+}
+
+/// A recording's flights, with the refusals of those that cannot be used.
+fn recorded(
+    bytes: &[u8],
+    source_name: &str,
+    request: &BriefRequest,
+) -> Vec<Result<(Flight, String), Refusal>> {
+    let read = track_options(request).and_then(|options| tracks(bytes, source_name, &options));
+    let read = match read {
+        Ok(read) => read,
+        Err(error) => return vec![Err(error.into())],
+    };
+    let stem = Path::new(source_name).file_stem().map_or("recording".into(), |stem| stem.to_string_lossy());
+    let stem = stem.split('.').next().unwrap_or("recording").to_string();
+    let used = read.tracks.into_iter().map(|track| Ok((track.flight(&stem), source_name.to_string())));
+    used.chain(read.refused.into_iter().map(|error| Err(error.into()))).collect()
+}
+
+fn track_options(request: &BriefRequest) -> Result<TrackOptions, IntakeError> {
+    let columns = request.columns.as_deref().map(|text| Columns::parse(text, "--columns")).transpose()?;
+    let date = request.recorded_on.as_deref().map(|text| date_argument("--recorded-on", text)).transpose()?;
+    let usual = TrackOptions::default();
+    Ok(TrackOptions {
+        columns: columns.unwrap_or_default(),
+        date,
+        swap_lat_lon: request.swap_lat_lon,
+        ..usual
+    })
 }
 
 fn briefed(mut flight: Flight, source_name: &str, common: &Common) -> Result<Brief, Refusal> {

@@ -4,15 +4,15 @@ use std::io::{Read, Write};
 use std::path::{Path, PathBuf};
 use tempfile::NamedTempFile;
 
-/// No flight file is longer than this; a longer one is something else.
-const LONGEST_INPUT: u64 = 16 << 20;
+/// No flight file and no recording is longer than this; a longer one is something else.
+const LONGEST_INPUT: u64 = 256 << 20;
 
 /// A file that cannot be read or written.
 #[derive(Debug, thiserror::Error)]
 pub(super) enum FileError {
     #[error("{source_name}: cannot be read: {source}")]
     Read { source_name: String, source: std::io::Error },
-    #[error("{source_name}: longer than {} MB, which no flight file is", LONGEST_INPUT >> 20)]
+    #[error("{source_name}: longer than {} MB, which no flight and no recording is", LONGEST_INPUT >> 20)]
     TooLong { source_name: String },
     #[error("{}: cannot be written: {source}", .path.display())]
     Write { path: PathBuf, source: std::io::Error },

@@ -113,6 +113,7 @@ impl Draft {
             horizon,
             waypoints: self.waypoints.into_iter().map(|w| w.value).collect(),
             polar_limits: self.polar_limits,
+            recorded: None,
             dut1: self.dut1,
             brightness: self.brightness,
             low_sun: self.low_sun,

@@ -3,6 +3,7 @@
 use super::ahead::{Alternate, LowSunLimits, StationAir};
 use super::brightness::Brightness;
 use super::place::Named;
+use super::track::Repairs;
 use crate::places::Aerodrome;
 use crate::units::{Dut1, Instant, Latitude, Metres, Place, PlaceError};
 use chrono_tz::Tz;
@@ -30,6 +31,8 @@ pub struct Flight {
     pub waypoints: Vec<RoutePoint>,
     /// Where its operator's authority draws the polar areas, if not where 14 CFR 121.7 does.
     pub polar_limits: Option<PolarLimits>,
+    /// What it was recorded as, if it is no plan.
+    pub recorded: Option<Recorded>,
     /// UT1 − UTC on its date, if the planner knows it.
     pub dut1: Option<Dut1>,
     /// What the planner asks about the brightness outside.
@@ -72,6 +75,17 @@ impl From<Named> for Stop {
         let name = aerodrome.map(|a| a.name().to_string());
         Self { label, name, place, zone: aerodrome.map(Aerodrome::zone), aerodrome }
     }
+}
+
+/// A flight that was recorded: its waypoints are the recording's points.
+#[derive(Debug, Clone)]
+pub struct Recorded {
+    /// How many points were kept.
+    pub points: usize,
+    /// Seconds from take-off and height of each point, where heights are recorded.
+    pub heights: Option<Vec<(f64, Metres)>>,
+    /// What was mended.
+    pub repairs: Repairs,
 }
 
 /// Rates of climb and descent, each a height a minute.

@@ -18,7 +18,7 @@ pub use ahead::{Alternate, LowSunLimits, StationAir};
 pub use brightness::{Brightness, BrightnessError, lux_levels};
 pub use draft::Origin;
 pub use file::flight_file;
-pub use flight::{ClimbRates, Flight, PolarLimits, RoutePoint, Stop};
+pub use flight::{ClimbRates, Flight, PolarLimits, Recorded, RoutePoint, Stop};
 pub use inline::{Inline, date_argument, inline_flight, instant_argument, place_argument};
 pub use problem::{IntakeError, Problem};
 pub use track::{

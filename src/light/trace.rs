@@ -44,9 +44,11 @@ impl Trace {
             })
         };
         let mut curves = Vec::with_capacity(path.legs().len() + cuts.len());
+        let mut cuts = cuts.iter().copied().peekable();
         for leg in path.legs() {
-            let inner = cuts.iter().copied().filter(|&cut| leg.begin_s < cut && cut < leg.end_s);
             let mut begin_s = leg.begin_s;
+            while cuts.next_if(|&cut| cut <= leg.begin_s).is_some() {}
+            let inner = std::iter::from_fn(|| cuts.next_if(|&cut| cut < leg.end_s));
             for end_s in inner.chain(std::iter::once(leg.end_s)) {
                 fit(leg, &through, (begin_s, end_s), &mut curves);
                 begin_s = end_s;

@@ -92,8 +92,11 @@ pub fn fly(flight: &Flight) -> Result<Path, FlightError> {
             begin = end;
         }
     }
-    // the last fix is the landing
+    // the last fix is the landing, and a recording's points are no waypoints
     passed_s.pop();
+    if flight.recorded.is_some() {
+        passed_s.clear();
+    }
     if legs.iter().all(|leg| leg.length_m() == 0.0) {
         return Err(FlightError::NoLength { from: flight.from.label.clone(), to: flight.to.label.clone() });
     }
@@ -108,6 +111,9 @@ pub fn fly(flight: &Flight) -> Result<Path, FlightError> {
 
 /// The level from take-off to landing, or up to it and down from it where rates of climb and descent are given.
 fn heights(flight: &Flight, airborne_s: f64) -> Option<Heights> {
+    if let Some(recorded) = &flight.recorded {
+        return recorded.heights.as_deref().map(Heights::through);
+    }
     let level = flight.level?;
     let Some(rates) = flight.climb else { return Some(Heights::level(level, airborne_s)) };
     let field = |stop: &crate::intake::Stop| stop.height().map_or(0.0, |height| height.0.min(level.0));

@@ -28,6 +28,11 @@ impl Heights {
         Self { points: vec![(0.0, height.0), (airborne_s, height.0)] }
     }
 
+    /// Straight lines through recorded heights, which begin at take-off and end at landing.
+    pub(super) fn through(points: &[(f64, Metres)]) -> Self {
+        Self { points: points.iter().map(|&(at_s, height)| (at_s, height.0)).collect() }
+    }
+
     /// Up at one rate, along, and down at the other; a flight too short for its level turns where both lines meet.
     pub(super) fn climbing(climb: Climb, airborne_s: f64) -> Self {
         let Climb { from_m, level_m, to_m, rates_m_s: (up, down) } = climb;

@@ -6,9 +6,11 @@
 mod table;
 mod lookup;
 mod near;
+mod nearest;
 mod runway;
 mod zone;
 
 pub use lookup::{UnknownAerodrome, aerodrome};
+pub use nearest::nearest;
 pub use runway::RunwayEnd;
 pub use table::{Aerodrome, aerodromes};

@@ -16,7 +16,11 @@ pub(super) fn cautions(brief: &Brief) -> Vec<String> {
         cautions.push(DECK.to_string());
     }
     cautions.push(ut1(brief.dut1_s));
-    if brief.flight.waypoints.is_empty() {
+    if brief.flight.recorded.is_some() {
+        cautions.push(
+            "Positions are those recorded, joined by shortest paths at a constant ground speed.".to_string(),
+        );
+    } else if brief.flight.waypoints.is_empty() {
         cautions.push("Positions are those of the shortest path at a constant ground speed.".to_string());
     }
     cautions

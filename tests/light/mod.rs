@@ -33,6 +33,7 @@ pub(crate) fn flight(name: &str, takeoff: gloamline::units::Instant, points: &[(
         horizon: None,
         waypoints: waypoints.collect(),
         polar_limits: None,
+        recorded: None,
         dut1: None,
         brightness: gloamline::intake::Brightness::default(),
         low_sun: None,

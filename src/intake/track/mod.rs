@@ -21,6 +21,7 @@ mod geojson;
 mod repair;
 mod jump;
 mod clean;
+mod flight;
 
 pub use gzip::plain;
 pub use kind::{InputKind, kind_of};

@@ -5,6 +5,7 @@ mod aloft;
 mod alternates;
 mod beneath;
 mod flight;
+mod recording;
 mod illuminance;
 mod moon;
 
@@ -35,6 +36,8 @@ pub(super) struct Record {
     circles: Vec<CircleRecord>,
     northernmost: PointRecord,
     southernmost: PointRecord,
+    #[serde(skip_serializing_if = "Option::is_none")]
+    recording: Option<recording::RecordingRecord>,
     ut1_minus_utc_s: f64,
     cautions: Vec<String>,
 }
@@ -71,6 +74,7 @@ impl Record {
             circles: circles(brief),
             northernmost: point(brief, brief.northernmost),
             southernmost: point(brief, brief.southernmost),
+            recording: brief.flight.recorded.as_ref().map(recording::RecordingRecord::of),
             ut1_minus_utc_s: brief.dut1_s,
             cautions: super::caution::cautions(brief),
         }

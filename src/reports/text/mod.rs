@@ -9,6 +9,7 @@ mod brightness;
 mod ahead;
 mod alternates;
 mod route;
+mod recording;
 
 use super::table::wrapped;
 use crate::Brief;
@@ -33,6 +34,7 @@ pub fn text(brief: &Brief) -> String {
         alternates::alternates(brief),
         route::extremes(brief),
         route::circles(brief),
+        recording::recording(brief),
         cautions(brief),
     ];
     parts.into_iter().filter(|part| !part.is_empty()).collect::<Vec<_>>().join("\n")
