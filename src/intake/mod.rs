@@ -19,5 +19,5 @@ pub use inline::{Inline, inline_flight, instant_argument, place_argument};
 pub use problem::{IntakeError, Problem};
 pub use track::{
     Bridge, Columns, InputKind, Repair, Repairs, Track, TrackOptions, TrackPoint, TrackProblem, Tracks,
-    kind_of, plain, tracks,
+    UnitReason, kind_of, plain, tracks,
 };

@@ -26,7 +26,7 @@ pub use gzip::plain;
 pub use kind::{InputKind, kind_of};
 pub use options::{Columns, TrackOptions};
 pub use problem::TrackProblem;
-pub use repair::{Bridge, Repair, Repairs};
+pub use repair::{Bridge, Repair, Repairs, UnitReason};
 
 use super::draft::Origin;
 use super::file::line_and_column;
