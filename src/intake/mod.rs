@@ -23,5 +23,5 @@ pub use inline::{Inline, date_argument, inline_flight, instant_argument, place_a
 pub use problem::{IntakeError, Problem};
 pub use track::{
     Bridge, Columns, InputKind, Repair, Repairs, Track, TrackOptions, TrackPoint, TrackProblem, Tracks,
-    kind_of, plain, tracks,
+    UnitReason, kind_of, plain, tracks,
 };

@@ -60,7 +60,7 @@ fn every_format_gives_the_same_points() {
         table("time;lat;lon;alt (m)\r\n", |t, lat, lon, h| {
             format!("{};{};{};{}\r\n", iso(t), comma(lat), comma(lon), comma(h))
         }),
-        table("utc\tlongitude\tlatitude\tbaroaltitude\n", |t, lat, lon, h| {
+        table("utc\tlongitude\tlatitude\tbaroaltitude_m\n", |t, lat, lon, h| {
             format!("{}\t{lon}\t{lat}\t{h}\n", t * 1000)
         }),
         table("\u{feff}\"Time\",\"Position\",\"Height [m]\"\n", |t, lat, lon, h| {

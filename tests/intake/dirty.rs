@@ -32,21 +32,21 @@ fn rows_out_of_order_are_sorted() {
 #[test]
 fn of_one_time_the_first_place_is_kept() {
     let again = |rows: &mut Vec<String>| rows.insert(3, rows[2].clone());
-    assert_eq!(mended_to_all_but(&[], again), ["1 point that repeat a time and place dropped"]);
+    assert_eq!(mended_to_all_but(&[], again), ["1 point with a time and place already given dropped"]);
     let other = |rows: &mut Vec<String>| rows.insert(3, rows[2].replace(",10,", ",11,"));
     assert_eq!(mended_to_all_but(&[], other), ["1 point with another place at a time already given dropped"]);
     let height = |rows: &mut Vec<String>| {
         rows.insert(3, rows[2].clone());
         rows[2] = rows[2].replace("10020", "");
     };
-    assert_eq!(mended_to_all_but(&[], height), ["1 point that repeat a time and place dropped"]);
+    assert_eq!(mended_to_all_but(&[], height), ["1 point with a time and place already given dropped"]);
 }
 
 #[test]
 fn jumps_are_dropped_even_if_the_first_point_is_one() {
     for jump in [0, 4, 7] {
         let edit = |rows: &mut Vec<String>| rows[jump] = rows[jump].replace(",10,", ",50,");
-        assert_eq!(mended_to_all_but(&[jump], edit), ["1 point that need more than 1500 kt dropped"]);
+        assert_eq!(mended_to_all_but(&[jump], edit), ["1 point needing more than 1500 kt dropped"]);
     }
     // 0.1° in a minute is 360 kt
     let slow = TrackOptions { max_speed_kt: 300.0, ..TrackOptions::default() };
@@ -109,6 +109,21 @@ fn heights_without_a_unit_are_metres_unless_too_high_and_it_is_said() {
 }
 
 #[test]
+fn heights_in_a_transponders_steps_are_feet_for_all_flights_of_the_file() {
+    let row = |i: i64| format!("A,{},{:.2},10,{}\n", 1_797_570_600 + 60 * i, 60.0 + 0.05 * i as f64, 125 * i);
+    let climb: String =
+        (0..30).fold("flight,time,lat,lon,baroaltitude\n".to_string(), |text, i| text + &row(i));
+    let both = climb.clone() + "B,1797570600,50,10,1000\nB,1797570660,50.1,10,1000\n";
+    for track in read(&both, "a").unwrap().tracks {
+        let said =
+            "heights in 'baroaltitude', which names no unit, taken as feet, since they come in steps of 25";
+        assert_eq!(mended(&track), [said]);
+    }
+    let metres = only(&climb.replace("0\n", "1\n").replace("5\n", "6\n"), "a");
+    assert_eq!(mended(&metres), ["heights in 'baroaltitude', which names no unit, taken as metres"]);
+}
+
+#[test]
 fn a_silence_is_marked() {
     let track = only(&flight(|rows| drop(rows.drain(1..7))).replace("1797571020", "1797571980"), "a");
     assert_eq!(
@@ -139,8 +154,12 @@ fn times_of_day_need_a_date_and_pass_midnight() {
     let track = tracks(text.as_bytes(), "a", &dated).unwrap().tracks.remove(0);
     assert_eq!(points(&track)[2], "2026-12-19T00:01:00 60.1000 10.0000 -");
     assert_eq!(
-        mended(&track)[..2],
-        ["times of day followed past a midnight", "1 point out of order sorted by time"]
+        mended(&track)[..3],
+        [
+            "3 points with a time that names no zone taken as UTC",
+            "times of day followed past a midnight",
+            "1 point out of order sorted by time"
+        ]
     );
     let beside = only("date,time,lat,lon\n2026-12-18,23:59:00Z,60,10\n2026-12-19,00:01:00Z,60.1,10\n", "a");
     assert_eq!(points(&beside)[1], "2026-12-19T00:01:00 60.1000 10.0000 -");

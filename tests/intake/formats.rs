@@ -153,7 +153,7 @@ fn lines_cut_at_the_antimeridian_are_joined_there() {
     assert_eq!(
         mended(&track),
         [
-            "1 point that repeat a time and place dropped",
+            "1 point with a time and place already given dropped",
             "no points from 2026-12-18T05:10:00Z to 2026-12-18T05:40:00Z (30 min): bridged",
             "no points from 2026-12-18T05:40:00Z to 2026-12-18T06:10:00Z (30 min): bridged"
         ]

@@ -86,6 +86,7 @@ fn long_hostile_files_take_no_longer_than_they_must() {
         "time,lat,lon\n".to_string() + &"1,2\n".repeat(million / 4),
         "time,lat,lon\n\"".to_string() + &"1,2\n".repeat(million / 4),
         lines("time,lat,lon,id\n", |i| format!("{},1,2,{}\n", 1_797_570_600 + i % 2, i / 2)),
+        lines("time,lat,lon,id\n", |i| format!("1797570600,1,2,{}\n", i / 3)),
         lines("time,lat,lon\n", |i| format!("{},{},2\n", 1_797_570_600 - i, i * 7919 % 179 - 89)),
     ] {
         read(text.as_bytes(), "a.csv");

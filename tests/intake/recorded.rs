@@ -63,6 +63,6 @@ fn the_same_flight_soiled_comes_out_as_it_was() {
     assert_eq!(said[0], "16 points without a position that exists dropped");
     assert_eq!(said[1], "16 points at exactly 0°, 0° dropped");
     assert!(said[2].ends_with("out of order sorted by time"));
-    assert_eq!(said[3], "16 points that repeat a time and place dropped");
-    assert_eq!(said[4..], ["16 points that need more than 1500 kt dropped"]);
+    assert_eq!(said[3], "16 points with a time and place already given dropped");
+    assert_eq!(said[4..], ["16 points needing more than 1500 kt dropped"]);
 }

@@ -46,7 +46,7 @@ pub(super) fn clean(raw: RawTrack, options: &TrackOptions) -> Found<Cleaned> {
         return Err((Some(at), TrackProblem::AllJumps(options.max_speed_kt.to_string())));
     }
     check_duration(&points).map_err(|problem| (Some(at), problem))?;
-    repairs.0.extend(unit_guessed.map(|(column, feet)| Repair::UnitAssumed { column, feet }));
+    repairs.0.extend(unit_guessed.map(|(column, why)| Repair::UnitAssumed { column, why }));
     fill_heights(&mut points, &mut repairs);
     note_bridges(&points, options.gap_s, &mut repairs);
     Ok((name, points.iter().map(finished).collect(), repairs))

@@ -43,7 +43,8 @@ impl Clock {
                 self.zoneless += usize::from(!zoned);
                 within_years(s)
             }
-            Stamp::OfDay { s } => {
+            Stamp::OfDay { s, zoned } => {
+                self.zoneless += usize::from(!zoned);
                 let date = self.date.ok_or(NoTime::NoDate)?;
                 let since = self.unrolled(s);
                 within_years(date + since)
@@ -54,8 +55,8 @@ impl Clock {
     /// The instant that a date and a time of day name; a time that has its own date is read alone.
     pub(super) fn read_on(&mut self, date: &str, text: &str) -> Result<Instant, NoTime> {
         match stamp(text) {
-            Some(Stamp::OfDay { s }) => {
-                self.zoneless += usize::from(!text.trim_end().ends_with(['Z', 'z']));
+            Some(Stamp::OfDay { s, zoned }) => {
+                self.zoneless += usize::from(!zoned);
                 within_years(midnight(date).ok_or(NoTime::Unreadable)? + s)
             }
             _ => self.read(text),

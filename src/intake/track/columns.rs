@@ -37,8 +37,6 @@ const HEIGHTS: &str = "geoaltitude altitudegeo geometricaltitude altgeom altgeo 
     altitude alt elevation ele baroaltitude altitudebaro baroalt altbaro pressurealtitude level flightlevel";
 const FLIGHTS: &str =
     "flightid flight flightno flightnumber trackid callsign ident id icao24 hex registration tail";
-/// Columns of these names, written as one word, count in metres by their publishers' documentation.
-const METRES_BY_NAME: [&str; 2] = ["baroaltitude", "geoaltitude"];
 /// Words that say a unit of time or of angle: a count since 1970 tells its unit, and angles are degrees.
 const UNIT_WORDS: &str =
     "s sec secs second seconds ms millis milliseconds us ns deg degree degrees dd iso iso8601";
@@ -69,9 +67,6 @@ impl Header {
             parts.pop();
         }
         let name = parts.concat();
-        if METRES_BY_NAME.contains(&lower.trim()) {
-            unit = unit.or(Some(HeightUnit::Metre));
-        }
         if matches!(name.as_str(), "flightlevel" | "level") {
             unit = unit.or(Some(HeightUnit::FlightLevel));
         }
@@ -168,7 +163,7 @@ mod tests {
         assert_eq!(found.height, Some((3, Some(HeightUnit::Foot))));
         assert_eq!(found.flight, None);
         let found = of("time,icao24,lat,lon,velocity,heading,baroaltitude,geoaltitude,callsign", "");
-        assert_eq!(found.height, Some((7, Some(HeightUnit::Metre))));
+        assert_eq!(found.height, Some((7, None)));
         assert_eq!(found.flight, Some(8));
         let found = of("date,time_ms,lng,lat,alt", "");
         assert_eq!((found.time, found.date, found.place), (1, Some(0), PlaceColumns::Two(3, 2)));

@@ -3,6 +3,7 @@
 use super::columns::{PlaceColumns, Roles, is_numbered, roles};
 use super::options::HeightUnit;
 use super::raw::{Gathering, MOST_FLIGHTS, RawTrack, Reading};
+use super::repair::UnitReason;
 use super::sheet::{Sheet, number};
 use super::{Found, TrackOptions};
 use crate::units::Metres;
@@ -34,9 +35,7 @@ pub(super) fn read(text: &str, options: &TrackOptions) -> Found<Vec<RawTrack>> {
     }
     let mut tracks = rows.gathering.done();
     if let Some(name) = unit_header {
-        for track in &mut tracks {
-            guess_unit(track, &name);
-        }
+        guess_unit(&mut tracks, &name);
     }
     Ok(tracks)
 }
@@ -135,16 +134,43 @@ impl Rows<'_> {
     }
 }
 
-/// Heights without a unit are metres, unless so many would be higher than aircraft fly that they can only be feet.
-fn guess_unit(track: &mut RawTrack, header: &str) {
-    let known = track.points.iter().filter(|point| point.height_m.is_finite()).count();
-    let beyond = track.points.iter().filter(|point| point.height_m > HIGHEST_M).count();
+/// Heights without a unit are metres, unless so many would be higher than aircraft fly that they can only be feet, or
+/// they come in the steps in which transponders count feet. The column has one unit for all flights.
+fn guess_unit(tracks: &mut [RawTrack], header: &str) {
+    let heights = || tracks.iter().flat_map(|track| &track.points).map(|point| point.height_m);
+    let known = || heights().filter(|height| height.is_finite());
+    let beyond = known().filter(|height| *height > HIGHEST_M).count();
     // a few may be faults
-    let is_feet = beyond * 10 > known;
-    if is_feet {
-        track.points.iter_mut().for_each(|point| point.height_m *= HeightUnit::Foot.metres());
+    let why = if beyond * 10 > known().count() {
+        UnitReason::TooHigh
+    } else if is_stepped(known()) {
+        UnitReason::Stepped
+    } else {
+        UnitReason::Default
+    };
+    let unit = if why == UnitReason::Default { HeightUnit::Metre } else { HeightUnit::Foot };
+    for track in tracks {
+        let is_known = track.points.iter().any(|point| point.height_m.is_finite());
+        track.points.iter_mut().for_each(|point| point.height_m *= unit.metres());
+        track.unit_guessed = is_known.then(|| (header.to_string(), why));
     }
-    if known > 0 {
-        track.unit_guessed = Some((header.to_string(), is_feet));
+}
+
+/// Whether heights come in steps of 25 and in many different ones, as metres never do.
+///
+/// # Source
+/// ICAO Annex 10, volume IV, 3.1.2.6.5.4: pressure altitude is reported in steps of 25 ft or of 100 ft.
+fn is_stepped(heights: impl Iterator<Item = f64>) -> bool {
+    const STEP_FT: f64 = 25.0;
+    const MANY: usize = 20;
+    let (mut all, mut on_step, mut different) = (0usize, 0usize, HashSet::new());
+    for height in heights.filter(|height| *height != 0.0) {
+        all += 1;
+        if height % STEP_FT == 0.0 {
+            on_step += 1;
+            different.insert(height.to_bits());
+        }
     }
+    // one in twenty may be a fault or filled in by the recorder
+    different.len() >= MANY && on_step * 20 >= all * 19
 }

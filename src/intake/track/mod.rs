@@ -27,7 +27,7 @@ pub use gzip::plain;
 pub use kind::{InputKind, kind_of};
 pub use options::{Columns, TrackOptions};
 pub use problem::TrackProblem;
-pub use repair::{Bridge, Repair, Repairs};
+pub use repair::{Bridge, Repair, Repairs, UnitReason};
 
 use super::draft::Origin;
 use super::file::line_and_column;
@@ -37,6 +37,10 @@ use raw::RawTrack;
 
 /// What went wrong in a text, and the byte it stands on; the whole text where no byte is to blame.
 type Found<T> = Result<T, (Option<usize>, TrackProblem)>;
+
+/// How many refused flights are shown to the column of their fault, for which the text is read from its beginning; the
+/// others are shown to the line at which they begin.
+const MOST_LOCATED: usize = 100;
 
 /// A point of a recorded track.
 #[derive(Debug, Clone, Copy, PartialEq)]
@@ -96,9 +100,10 @@ pub fn tracks(bytes: &[u8], source_name: &str, options: &TrackOptions) -> Result
         let name = one.name.clone().filter(|_| several);
         match clean::clean(one, options) {
             Ok((name, points, repairs)) => read.tracks.push(Track { name, origin, points, repairs }),
-            Err((at, problem)) => {
+            Err((at, problem)) if read.refused.len() < MOST_LOCATED => {
                 read.refused.push(placed((at, problem.of_flight(name))));
             }
+            Err((_, problem)) => read.refused.push(fail(origin, problem.of_flight(name))),
         }
     }
     if read.tracks.is_empty() {

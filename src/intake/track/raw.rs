@@ -3,6 +3,7 @@
 //! Does not know in what format they came, nor whether they make sense together.
 
 use super::clock::{Clock, NoTime};
+use super::repair::UnitReason;
 use super::{Found, TrackOptions, TrackProblem};
 use crate::units::{Instant, Place};
 
@@ -55,8 +56,8 @@ pub(super) struct RawTrack {
     pub(super) points: Vec<RawPoint>,
     pub(super) tally: Tally,
     pub(super) clock: Clock,
-    /// The header of a column of heights without a unit, and whether it was taken as feet.
-    pub(super) unit_guessed: Option<(String, bool)>,
+    /// The header of a column of heights without a unit, and how one was found.
+    pub(super) unit_guessed: Option<(String, UnitReason)>,
 }
 
 /// All flights of a file as they are read.

@@ -14,6 +14,17 @@ pub struct Bridge {
     pub to: Instant,
 }
 
+/// Why heights whose column names no unit were taken in one.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub enum UnitReason {
+    /// Metres, since nothing speaks against it.
+    Default,
+    /// Feet, since as metres more than one in ten would be higher than aircraft fly.
+    TooHigh,
+    /// Feet, since they come in the steps in which transponders count.
+    Stepped,
+}
+
 /// One kind of repair; counts are of points unless said otherwise.
 #[derive(Debug, Clone, PartialEq)]
 pub enum Repair {
@@ -46,8 +57,8 @@ pub enum Repair {
     UnitAssumed {
         /// The column.
         column: String,
-        /// Whether they were taken as feet, for being too high as metres.
-        feet: bool,
+        /// How a unit was found.
+        why: UnitReason,
     },
     /// Heights that no aircraft flies at: taken as missing.
     HeightsDropped(usize),
@@ -92,15 +103,19 @@ impl Display for Repair {
             Self::Midnights(1) => write!(f, "times of day followed past a midnight"),
             Self::Midnights(n) => write!(f, "times of day followed past {n} midnights"),
             Self::Unsorted(n) => write!(f, "{} out of order sorted by time", points(n)),
-            Self::Repeated(n) => write!(f, "{} that repeat a time and place dropped", points(n)),
+            Self::Repeated(n) => write!(f, "{} with a time and place already given dropped", points(n)),
             Self::Contradicted(n) => {
                 write!(f, "{} with another place at a time already given dropped", points(n))
             }
             Self::Jumped { count, max_speed_kt } => {
-                write!(f, "{} that need more than {max_speed_kt} kt dropped", points(count))
+                write!(f, "{} needing more than {max_speed_kt} kt dropped", points(count))
             }
-            Self::UnitAssumed { column, feet } => {
-                let taken = if *feet { "feet, since as metres they were too high" } else { "metres" };
+            Self::UnitAssumed { column, why } => {
+                let taken = match why {
+                    UnitReason::Default => "metres",
+                    UnitReason::TooHigh => "feet, since as metres they were too high",
+                    UnitReason::Stepped => "feet, since they come in steps of 25",
+                };
                 write!(f, "heights in {}, which names no unit, taken as {taken}", quoted(column))
             }
             Self::HeightsDropped(n) => {

@@ -8,8 +8,8 @@
 pub(super) enum Stamp {
     /// Seconds since 1970-01-01 00:00 UTC, and whether the text said its offset from UTC.
     Unix { s: f64, zoned: bool },
-    /// Seconds since midnight, with no date.
-    OfDay { s: f64 },
+    /// Seconds since midnight, with no date, and whether the text said that it is UTC.
+    OfDay { s: f64, zoned: bool },
 }
 
 /// One day.
@@ -65,8 +65,9 @@ fn calendar(bytes: &[u8], extended: bool) -> Option<Stamp> {
 fn of_day(bytes: &[u8]) -> Option<Stamp> {
     let mut reader = Reader { bytes };
     let s = reader.clock(true)?;
-    let utc = reader.offset()?.east_s() == 0.0;
-    (utc && reader.bytes.is_empty()).then_some(Stamp::OfDay { s })
+    let offset = reader.offset()?;
+    let utc = offset.east_s() == 0.0 && reader.bytes.is_empty();
+    utc.then_some(Stamp::OfDay { s, zoned: offset != Offset::Unsaid })
 }
 
 /// Days from 1970-01-01 to a date of the Gregorian calendar.
@@ -206,7 +207,7 @@ mod tests {
             assert_eq!(stamp(text), Some(Stamp::Unix { s: T, zoned: true }), "{text}");
         }
         assert_eq!(stamp("2026-12-18T05:10:00"), Some(Stamp::Unix { s: T, zoned: false }));
-        assert_eq!(stamp("5:10:00,5Z"), Some(Stamp::OfDay { s: 18_600.5 }));
+        assert_eq!(stamp("5:10:00,5Z"), Some(Stamp::OfDay { s: 18_600.5, zoned: true }));
         assert_eq!(midnight("2026-12-18"), Some(T - 18_600.0));
         assert_eq!(midnight("20261218"), Some(T - 18_600.0));
     }

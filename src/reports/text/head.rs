@@ -48,7 +48,9 @@ impl Clocks {
         for stop in [&flight.from, &flight.to] {
             match (stop.zone, clocks.last_mut()) {
                 (Some(zone), Some((label, other))) if zone == *other => {
-                    *label = format!("{label}, {}", stop.label);
+                    if *label != stop.label {
+                        *label = format!("{label}, {}", stop.label);
+                    }
                 }
                 (Some(zone), _) => clocks.push((stop.label.clone(), zone)),
                 (None, _) => {}
