@@ -9,6 +9,9 @@ use crate::path::Path;
 use crate::sky::{GeometricElevation, Horizon, Sky};
 use crate::units::{Angle, Metres};
 
+/// With more bends than this the limit is given by the minute alone.
+const MOST_BENDS: usize = 200;
+
 /// What the flight deck sees, with the Sun at each crossing and how far each can be trusted.
 #[derive(Debug, Clone)]
 pub struct DeckView {
@@ -55,8 +58,12 @@ pub(super) fn view(
 
 fn limits(horizon: &DeckHorizon, path: &Path) -> Vec<(f64, GeometricElevation)> {
     let minutes = (0..=(path.airborne_s / super::STEP_S) as u32).map(|i| f64::from(i) * super::STEP_S);
-    let bends = path.heights.iter().flat_map(crate::path::Heights::bends_s);
-    let mut times: Vec<f64> = minutes.chain(bends).chain(std::iter::once(path.airborne_s)).collect();
+    // a recording bends at every point: its minutes are enough to draw
+    let bends = path.heights.iter().flat_map(crate::path::Heights::bends_s).take(MOST_BENDS + 1);
+    let bends: Vec<f64> = bends.collect();
+    let few = if bends.len() > MOST_BENDS { &[][..] } else { &bends[..] };
+    let mut times: Vec<f64> =
+        minutes.chain(few.iter().copied()).chain(std::iter::once(path.airborne_s)).collect();
     times.sort_by(f64::total_cmp);
     times.dedup();
     times.into_iter().map(|at_s| (at_s, horizon.limit_at(at_s))).collect()

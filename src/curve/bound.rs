@@ -102,6 +102,7 @@ mod tests {
 
     #[test]
     fn a_long_haul_flight_is_one_piece_and_a_day_in_the_air_is_not() {
+        assert_eq!(nodes_for(JET, 60.0).map(|i| SIZES[i]), Some(4));
         assert_eq!(nodes_for(JET, 1800.0).map(|i| SIZES[i]), Some(8));
         assert_eq!(nodes_for(JET, 4.0 * 3600.0).map(|i| SIZES[i]), Some(12));
         assert_eq!(nodes_for(JET, 12.0 * 3600.0).map(|i| SIZES[i]), Some(20));

@@ -6,7 +6,7 @@ use std::sync::OnceLock;
 pub const MAX_NODES: usize = 24;
 
 /// The numbers of nodes on offer.
-pub(super) const SIZES: [usize; 5] = [8, 12, 16, 20, MAX_NODES];
+pub(super) const SIZES: [usize; 6] = [4, 8, 12, 16, 20, MAX_NODES];
 
 /// The nodes cos(πj/(n−1)) in rising order, from −1 to 1.
 ///

@@ -4,9 +4,6 @@ use super::nodes::{MAX_NODES, SIZES, table};
 use super::{Bandwidth, Near, nodes_for};
 use crate::units::Four;
 
-/// The place of 16 nodes in the list of sizes.
-const SIXTEEN: usize = 2;
-
 /// One smooth piece of a function of time.
 #[derive(Debug, Clone)]
 pub struct Curve {
@@ -41,19 +38,19 @@ impl Curve {
         Some(Self::sampled(span, size, near.turn_rad_s(), f))
     }
 
-    /// The same for an `f` that has more in it than the derivation knows: on at least 16 nodes, and its turning points are
-    /// bounded by its own coefficients alone. How well so many nodes hold it is for the caller to know.
-    pub fn through_at_least_16(
-        begin_s: f64,
-        end_s: f64,
+    /// The same for an `f` that has more in it than the derivation knows: on so many nodes at least, and its turning points
+    /// are bounded by its own coefficients alone. How well so many nodes hold it is for the caller to know.
+    pub fn through_at_least(
+        least: usize,
+        (begin_s, end_s): (f64, f64),
         band: Bandwidth,
         f: impl Fn(Four) -> Four,
     ) -> Option<Self> {
-        let size = nodes_for(band, end_s - begin_s)?.max(SIXTEEN);
+        let enough = SIZES.iter().position(|&size| size >= least).unwrap_or(SIZES.len() - 1);
+        let size = nodes_for(band, end_s - begin_s)?.max(enough);
         Some(Self::sampled((begin_s, end_s), size, f64::INFINITY, f))
     }
 
-    #[inline]
     fn sampled((begin_s, end_s): (f64, f64), size: usize, rate_rad_s: f64, f: impl Fn(Four) -> Four) -> Self {
         let (mid_s, half_s) = (f64::midpoint(begin_s, end_s), (end_s - begin_s) / 2.0);
         let mut values = [0.0; MAX_NODES];

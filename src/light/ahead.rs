@@ -119,7 +119,13 @@ fn low_enough(trace: &Trace, path: &Path, sky: &Sky, up_to: ApparentElevation) -
             let mut cuts: Vec<f64> = heights.bends_s().chain(heights.passes_s(SeenAt::KINK)).collect();
             cuts.sort_by(f64::total_cmp);
             let seen = SeenAt::new(up_to);
-            not_above(&Trace::against(path, sky, &cuts, |at_s| seen.geometric(heights.at(at_s)).0), 0.0)
+            // the limit moves by a few hundredths of a degree over the whole atmosphere: in ten seconds by nothing that a
+            // cubic would not hold
+            let nodes = |(begin_s, end_s): (f64, f64)| if end_s - begin_s <= 10.0 { 4 } else { 16 };
+            not_above(
+                &Trace::against((path, sky), &cuts, nodes, |at_s| seen.geometric(heights.at(at_s)).0),
+                0.0,
+            )
         }
         _ => not_above(trace, geometric_aloft(up_to, eye(path, 0.0)).0.rad().sin()),
     }

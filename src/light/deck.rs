@@ -60,6 +60,20 @@ impl DeckHorizon {
         self.horizon.sun_centre_limit(self.heights.at(at_s), self.semidiameter)
     }
 
+    /// How many nodes hold the limit over a span in which the climb is steady, by the ellipse that the root leaves: with
+    /// heights above the horizon in the ratio r its parameter is (√r + 1)/(√r − 1), which is 400 for 1.01 and 41 for 1.1,
+    /// so that 4 nodes err by less than 4e−11 rad and 8 by less than 2e−13.
+    fn nodes(&self, (begin_s, end_s): (f64, f64)) -> usize {
+        let above = |at_s: f64| self.heights.at(at_s).0 - self.horizon.height().0;
+        let (a, b) = (above(begin_s), above(end_s));
+        let (low, high) = (a.min(b), a.max(b));
+        match high {
+            h if low > 0.0 && h <= 1.01 * low => 4,
+            h if low > 0.0 && h <= 1.1 * low => 8,
+            _ => 16,
+        }
+    }
+
     /// Times between which the limit is smooth enough for 16 nodes: where the climb changes, and where the height above
     /// the horizon has quadrupled ([`Horizon`] says why). The first half metre, in which the limit falls like a root, is a
     /// stretch of its own: it lasts less than the 0.05 s that a time may err by.
@@ -80,7 +94,8 @@ impl DeckHorizon {
         if self.heights.is_level() {
             return (Cow::Borrowed(beneath), self.limit_at(0.0).0);
         }
-        let moving = Trace::against(path, sky, &self.cuts(), |at_s| self.limit_at(at_s).0);
+        let moving =
+            Trace::against((path, sky), &self.cuts(), |span| self.nodes(span), |at_s| self.limit_at(at_s).0);
         (Cow::Owned(moving), Angle::ZERO)
     }
 }

@@ -33,12 +33,16 @@ pub struct Peak {
 
 impl Trace {
     /// The sine of the Sun's elevation less that of a limit which changes on the way; the limit is smooth between `cuts`,
-    /// given in seconds from take-off in rising order, and 16 nodes hold it there.
-    pub(super) fn against(path: &Path, sky: &Sky, cuts: &[f64], limit: impl Fn(f64) -> Angle) -> Self {
+    /// given in seconds from take-off in rising order, and `nodes` says how many hold it over a span between two.
+    pub(super) fn against(
+        (path, sky): (&Path, &Sky),
+        cuts: &[f64],
+        nodes: impl Fn((f64, f64)) -> usize,
+        limit: impl Fn(f64) -> Angle,
+    ) -> Self {
         let window = sky.window(path.takeoff, path.landing());
-        let through = |leg: &Leg, (begin_s, end_s): (f64, f64)| {
-            let band = band(leg);
-            Curve::through_at_least_16(begin_s, end_s, band, |t| {
+        let through = |leg: &Leg, span: (f64, f64)| {
+            Curve::through_at_least(nodes(span), span, band(leg), |t| {
                 let limits = Four::from(t.to_array().map(|t| limit(t).rad().sin()));
                 sine_of_elevation(leg.normal(t), &window.at(t)) - limits
             })

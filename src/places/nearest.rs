@@ -24,7 +24,7 @@ mod tests {
     #[test]
     fn a_position_on_a_runway_belongs_to_its_aerodrome() {
         let place = Place::from_deg(69.68, 18.91).unwrap();
-        assert_eq!(nearest(place, Metres(8000.0)).map(|field| field.code()), Some("ENTC"));
+        assert_eq!(nearest(place, Metres(8000.0)).map(crate::places::Aerodrome::code), Some("ENTC"));
         assert!(nearest(Place::from_deg(85.0, 10.0).unwrap(), Metres(8000.0)).is_none());
     }
 }

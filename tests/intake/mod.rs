@@ -1,5 +1,6 @@
 //! What is taken in: recorded tracks.
 
+mod brief;
 mod formats;
 mod alike;
 mod dirty;
