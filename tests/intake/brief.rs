@@ -1,6 +1,7 @@
 //! A recorded flight is briefed as the same flight planned would be.
 
 use crate::light::flight;
+use crate::tables::{instant, number, rows};
 use gloamline::intake::{TrackOptions, tracks};
 use gloamline::light::{Crossing, along};
 use gloamline::path::fly;
@@ -90,4 +91,22 @@ fn a_recording_is_briefed_by_the_program_without_being_told_its_kind() {
     assert!(json["aloft"]["crossings"].as_array().unwrap().len() >= 2);
     let height = json["aloft"]["height_m"].as_f64().unwrap();
     assert!((5_000.0..20_000.0).contains(&height) && Metres(height).feet() < 60_000.0);
+}
+
+#[test]
+fn a_real_recordings_crossings_are_those_of_an_independent_script() {
+    // as for the flights of `tests/light/crossings.rs`: 0.05 s, and 0.023″ over the rate
+    let table = concat!(env!("CARGO_MANIFEST_DIR"), "/tests/tables/recorded-track/flight.csv");
+    let found = recorded(&std::fs::read_to_string(table).unwrap());
+    let wanted = rows("recorded-track/crossings.csv");
+    assert!(wanted.len() >= 8);
+    assert_eq!(found.light.crossings.len(), wanted.len());
+    for (crossing, row) in found.light.crossings.iter().zip(&wanted) {
+        let name = format!("{:?}", crossing.limit).to_lowercase();
+        let direction = format!("{:?}", crossing.direction).to_lowercase();
+        assert_eq!((&name, &direction), (&row["limit"], &row["direction"]), "{row:?}");
+        let gap = found.path.takeoff.after_s(crossing.at_s).since_s(instant(row, "utc"));
+        let tolerance = 0.051 + 0.023 / number(row, "rate_deg_per_h").abs();
+        assert!(gap.abs() < tolerance, "{row:?}: {gap} s");
+    }
 }
