@@ -46,7 +46,9 @@ impl Clock {
         if let [from, to] = &local[..]
             && (&from.note, &from.ticks, &from.changes_s) == (&to.note, &to.ticks, &to.changes_s)
         {
-            local[0].name = format!("{}, {}", from.name, to.name);
+            if from.name != to.name {
+                local[0].name = format!("{}, {}", from.name, to.name);
+            }
             local.pop();
         }
         local.insert(0, Self::new(brief, "UTC".to_string(), Tz::UTC));
