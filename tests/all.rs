@@ -6,6 +6,7 @@ mod house;
 mod tables;
 mod curve;
 mod places;
+mod intake;
 mod sky;
 mod path;
 mod light;

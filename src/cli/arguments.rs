@@ -14,7 +14,7 @@ pub(super) struct Arguments {
 #[derive(Debug, Subcommand)]
 pub(super) enum Command {
     /// Brief flights: states, sunrises and sunsets, twilights and circles along the route
-    Brief(BriefRequest),
+    Brief(Box<BriefRequest>),
     /// The Sun's almanac quantities at an instant, a place's day, or a year's equinoxes and solstices
     Sun(SunRequest),
     /// A place's civil days: sunrise, sunset, twilights, transit, polar day and night, the Moon
@@ -42,6 +42,10 @@ pub(super) struct BriefRequest {
 
     #[command(flatten)]
     pub(super) inline: InlineRequest,
+
+    /// Your own points (CSV: name, lat, lon), for names in flights that are neither codes nor coordinates
+    #[arg(long, value_name = "FIXES.csv")]
+    pub(super) fixes: Option<PathBuf>,
 
     /// What goes to standard output
     #[arg(long = "as", value_enum, default_value_t = Form::Text, value_name = "FORM")]
@@ -74,6 +78,10 @@ pub(super) struct InlineRequest {
     /// Aerodrome code or coordinates of the landing
     #[arg(long, value_name = "PLACE", requires = "from", allow_hyphen_values = true)]
     pub(super) to: Option<String>,
+
+    /// Points between, parted by blanks: "7030N06000W 78N040W CYFB"
+    #[arg(long, value_name = "POINTS", requires = "from", allow_hyphen_values = true)]
+    pub(super) route: Option<String>,
 
     /// Take-off time, such as 2026-12-18T05:10Z
     #[arg(long, value_name = "TIME", requires = "from")]

@@ -3,9 +3,10 @@
 use super::Outcome;
 use super::arguments::{BriefRequest, Form};
 use super::files::{self, Batch, FileError};
+use super::fixes;
 use super::terminal;
 use gloamline::intake::{
-    Flight, Inline, IntakeError, Origin, PolarLimits, Problem, flight_file, inline_flight,
+    Fixes, Flight, Inline, IntakeError, Origin, PolarLimits, Problem, flight_file_with_fixes, inline_flight,
 };
 use gloamline::sky::Sky;
 use gloamline::units::{Dut1, Dut1Error, PlaceError};
@@ -37,11 +38,12 @@ struct Common {
     dut1: Dut1,
     sky: Sky,
     polar_limits: Option<PolarLimits>,
+    fixes: Fixes,
 }
 
 /// Briefs every flight asked for; a bad one does not keep the others back.
 pub(super) fn run(request: &BriefRequest) -> Outcome {
-    let common = match common(request) {
+    let mut common = match common(request) {
         Ok(common) => common,
         Err(problem) => {
             terminal::complain(&problem, None);
@@ -49,7 +51,16 @@ pub(super) fn run(request: &BriefRequest) -> Outcome {
         }
     };
     let (mut briefs, mut refused) = (Vec::new(), 0);
-    for flight in flights(request) {
+    if let Some(path) = &request.fixes {
+        match fixes::read(path) {
+            Ok((fixes, bad)) => (common.fixes, refused) = (fixes, bad),
+            Err(problem) => {
+                terminal::complain(&problem, None);
+                return Outcome::Failed;
+            }
+        }
+    }
+    for flight in flights(request, &common.fixes) {
         match flight.and_then(|(flight, source)| briefed(flight, &source, &common)) {
             Ok(brief) => briefs.push(brief),
             Err(refusal) => {
@@ -87,11 +98,11 @@ fn common(request: &BriefRequest) -> Result<Common, OptionError> {
     let north = request.north_polar_area.unwrap_or(usual.north.deg());
     let south = request.south_polar_area.unwrap_or(-usual.south.deg());
     let polar_limits = if given { Some(PolarLimits::from_deg(north, south)?) } else { None };
-    Ok(Common { dut1, sky: Sky::new(dut1), polar_limits })
+    Ok(Common { dut1, sky: Sky::new(dut1), polar_limits, fixes: Fixes::default() })
 }
 
 /// Each flight with the name of its source, read one at a time.
-fn flights(request: &BriefRequest) -> Vec<Result<(Flight, String), Refusal>> {
+fn flights(request: &BriefRequest, fixes: &Fixes) -> Vec<Result<(Flight, String), Refusal>> {
     let inline = &request.inline;
     if let Some(from) = &inline.from {
         let given = Inline {
@@ -105,15 +116,17 @@ fn flights(request: &BriefRequest) -> Vec<Result<(Flight, String), Refusal>> {
             horizon_ft: inline.horizon_ft,
             climb_ft_min: inline.climb_ft_min,
             descent_ft_min: inline.descent_ft_min,
+            route: inline.route.as_deref(),
+            fixes: Some(fixes),
         };
         return vec![
             inline_flight(&given).map(|flight| (flight, "the flight".to_string())).map_err(Refusal::from),
         ];
     }
-    request.files.iter().map(|path| read_flight(path)).collect()
+    request.files.iter().map(|path| read_flight(path, fixes)).collect()
 }
 
-fn read_flight(path: &Path) -> Result<(Flight, String), Refusal> {
+fn read_flight(path: &Path, fixes: &Fixes) -> Result<(Flight, String), Refusal> {
     let source_name = files::source_name(path);
     let bytes = files::read(path)?;
     let text = std::str::from_utf8(&bytes).map_err(|error| IntakeError {
@@ -122,7 +135,8 @@ fn read_flight(path: &Path) -> Result<(Flight, String), Refusal> {
         problem: Problem::NotText(error.valid_up_to()),
     })?;
     // a byte-order mark says nothing that UTF-8 does not
-    Ok((flight_file(text.trim_start_matches('\u{feff}'), &source_name)?, source_name))
+    let text = text.trim_start_matches('\u{feff}');
+    Ok((flight_file_with_fixes(text, &source_name, fixes)?, source_name))
 }
 
 fn briefed(mut flight: Flight, source_name: &str, common: &Common) -> Result<Brief, Refusal> {

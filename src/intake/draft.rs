@@ -67,6 +67,7 @@ pub(super) struct Draft {
     pub(super) from_air: Option<StationAir>,
     pub(super) to_air: Option<StationAir>,
     pub(super) alternates: Vec<Given<Alternate>>,
+    pub(super) warnings: Vec<String>,
 }
 
 /// RFC 3339 in UTC to the second, for messages.
@@ -116,6 +117,7 @@ impl Draft {
             from_air: self.from_air,
             to_air: self.to_air,
             alternates: self.alternates.into_iter().map(|a| a.value).collect(),
+            warnings: self.warnings,
         })
     }
 
@@ -161,9 +163,9 @@ fn climb_rates(
         (Some(climb), Some(descent)) if has_level => (climb, descent),
         (Some(rate), _) | (_, Some(rate)) => return Err((rate.origin, Problem::HalfAClimb)),
     };
-    let metres = |rate: &Given<f64>| match RATES_FT_MIN.contains(&rate.value) {
-        true => Ok(Metres::from_feet(rate.value)),
-        false => Err((rate.origin.clone(), Problem::ClimbRate(rate.value))),
+    let metres = |rate: &Given<f64>| {
+        let possible = RATES_FT_MIN.contains(&rate.value).then(|| Metres::from_feet(rate.value));
+        possible.ok_or_else(|| (rate.origin.clone(), Problem::ClimbRate(rate.value)))
     };
     Ok(Some(ClimbRates { climb: metres(&climb)?, descent: metres(&descent)? }))
 }

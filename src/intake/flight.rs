@@ -39,6 +39,8 @@ pub struct Flight {
     pub to_air: Option<StationAir>,
     /// Where it may divert to, in the order given.
     pub alternates: Vec<Alternate>,
+    /// What its planner should know of how it was read.
+    pub warnings: Vec<String>,
 }
 
 /// One end of a flight.
@@ -65,7 +67,7 @@ impl Stop {
 
 impl From<Named> for Stop {
     fn from(named: Named) -> Self {
-        let Named { label, place, aerodrome } = named;
+        let Named { label, place, aerodrome, .. } = named;
         let name = aerodrome.map(|a| a.name().to_string());
         Self { label, name, place, zone: aerodrome.map(Aerodrome::zone), aerodrome }
     }

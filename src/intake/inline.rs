@@ -1,9 +1,12 @@
 //! A flight given on the command line instead of in a file.
 
 use super::draft::{Draft, Given, Origin};
-use super::flight::Flight;
-use super::place::place;
+use super::fixes::Fixes;
+use super::flight::{Flight, RoutePoint};
+use super::gazetteer::Gazetteer;
+use super::place::{Named, place};
 use super::problem::{IntakeError, Problem};
+use super::route::route;
 use super::time::{date, duration_s, instant};
 
 /// The texts of a flight's command-line options.
@@ -29,6 +32,10 @@ pub struct Inline<'a> {
     pub descent_ft_min: Option<f64>,
     /// `--horizon-ft`
     pub horizon_ft: Option<f64>,
+    /// `--route`
+    pub route: Option<&'a str>,
+    /// The user's own fixes.
+    pub fixes: Option<&'a Fixes>,
 }
 
 /// Reads a flight from its options.
@@ -41,11 +48,13 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
         let origin = Origin::Option("--airborne, --landing");
         return Err(IntakeError { source_name: String::new(), origin, problem });
     }
+    let names = Gazetteer::new(given.fixes);
+    let (from, waypoints, to) = points(given, &names)?;
     let draft = Draft {
         source_name: String::new(),
         name: given.name.map(str::to_string),
-        from: read("--from", given.from, place)?.value,
-        to: read("--to", given.to, place)?.value,
+        from,
+        to,
         takeoff: read("--takeoff", given.takeoff, instant)?,
         airborne_s: given.airborne.map(|text| read("--airborne", text, duration_s)).transpose()?,
         landing: given.landing.map(|text| read("--landing", text, instant)).transpose()?,
@@ -57,15 +66,32 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
         descent_ft_min: given
             .descent_ft_min
             .map(|value| Given { value, origin: Origin::Option("--descent-ft-min") }),
-        waypoints: Vec::new(),
+        waypoints,
         polar_limits: None,
         dut1: None,
         low_sun: None,
         from_air: None,
         to_air: None,
         alternates: Vec::new(),
+        warnings: names.warnings(),
     };
     draft.checked()
+}
+
+/// The ends and what lies between, looked up in the order of the route.
+fn points(
+    given: &Inline<'_>,
+    names: &Gazetteer<'_>,
+) -> Result<(Named, Vec<Given<RoutePoint>>, Named), IntakeError> {
+    let from = read("--from", given.from, |text| names.next(text))?.value;
+    let between = |text: &str| route(text, names).map_err(|(_, problem)| problem);
+    let points = given.route.map(|text| read("--route", text, between)).transpose()?;
+    let waypoints = points.map_or(Vec::new(), |points| {
+        let one = |(value, _)| Given { value, origin: Origin::Option("--route") };
+        points.value.into_iter().map(one).collect()
+    });
+    let to = read("--to", given.to, |text| names.next(text))?.value;
+    Ok((from, waypoints, to))
 }
 
 /// A place given on its own: an aerodrome's code or coordinates, with its label and zone.

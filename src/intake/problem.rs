@@ -62,6 +62,51 @@ pub enum Problem {
     /// A UT1 − UTC that cannot be.
     #[error(transparent)]
     Dut1(#[from] Dut1Error),
+    /// A name that stands for several fixes, with nothing before it to be near to.
+    #[error("{} names {count} fixes, and no point before it tells which", quoted(name))]
+    SeveralFixes {
+        /// As given.
+        name: String,
+        /// How many there are.
+        count: usize,
+    },
+    /// A line that is too long, or not UTF-8.
+    #[error("the line is not UTF-8 text of ordinary length")]
+    NotALine,
+    /// A row of fixes that lacks something.
+    #[error("{} is no fix: name, latitude and longitude are wanted", quoted(.0))]
+    NoFix(String),
+    /// A fix's name that is too long or not printable.
+    #[error("{} is no name of a fix", quoted(.0))]
+    FixName(String),
+    /// A fix's latitude or longitude that is no number.
+    #[error("{} is no number of degrees", quoted(.0))]
+    FixNumber(String),
+    /// Latitude and longitude exchanged.
+    #[error("latitude {lat}° is outside −90° to 90°; with longitude {lon}° they look exchanged")]
+    Swapped {
+        /// As given.
+        lat: f64,
+        /// As given.
+        lon: f64,
+    },
+    /// More fixes than are held.
+    #[error("more than {most} fixes")]
+    TooManyFixes {
+        /// How many there may be.
+        most: usize,
+    },
+    /// A route without points.
+    #[error("the route names no point")]
+    EmptyRoute,
+    /// Two fields of which only one may be given.
+    #[error("'{one}' and '{other}' are both given")]
+    Exclusive {
+        /// One.
+        one: &'static str,
+        /// The other.
+        other: &'static str,
+    },
     /// A code that is not known.
     #[error(transparent)]
     UnknownAerodrome(UnknownAerodrome),
@@ -188,7 +233,7 @@ pub enum Problem {
 }
 
 /// A text as given, in quotes, cut short, with everything escaped that could act on a terminal.
-fn quoted(given: &str) -> String {
+pub(super) fn quoted(given: &str) -> String {
     let mut text = String::new();
     for c in given.chars().take(LONGEST_QUOTED) {
         if matches!(c, '\'' | '"') {
@@ -207,7 +252,9 @@ impl Problem {
     fn hint(&self) -> Option<String> {
         let text = match self {
             Self::UnknownAerodrome(unknown) => return unknown_place_hint(unknown),
-            Self::Coordinates(_) => "write 7830N02000W, 78N020W or 78.5,-20",
+            Self::Coordinates(_) => {
+                "write 7830N02000W, 78N020W, 78-30N 020-00W or 78.5,-20: two digits for degrees of latitude, three for longitude"
+            }
             Self::Instant(_) | Self::NoOffset(_) => {
                 "write 2026-12-18T05:10Z, or 2026-12-18T00:10-05:00 with an offset"
             }
@@ -218,7 +265,11 @@ impl Problem {
             Self::UnknownField(field) => return near_field(field),
             Self::Landing(_) => "give one of airborne = \"14h55m\" and landing = 2026-12-18T20:05:00Z",
             Self::HalfAClimb => "give level_ft, climb_ft_min and descent_ft_min together",
-            Self::LandingConflict { .. } => "leave one of them out",
+            Self::SeveralFixes { .. } => "give its coordinates instead",
+            Self::FixNumber(_) => "write decimal degrees, such as 78.5 and -20",
+            Self::Swapped { .. } => "a row without a header is name, latitude, longitude",
+            Self::EmptyRoute => "write points parted by blanks: \"7030N06000W 78N040W CYFB\"",
+            Self::Exclusive { .. } | Self::LandingConflict { .. } => "leave one of them out",
             _ => return None,
         };
         Some(text.to_string())

@@ -71,6 +71,8 @@ proptest! {
             horizon_ft: Some(level),
             climb_ft_min: Some(level),
             descent_ft_min: Some(level),
+            route: Some(&a),
+            ..Inline::default()
         };
         if let Err(error) = inline_flight(&inline) {
             prop_assert!(!error.to_string().contains(char::is_control), "{error}");

@@ -36,6 +36,7 @@ pub(crate) fn flight(name: &str, takeoff: gloamline::units::Instant, points: &[(
         from_air: None,
         to_air: None,
         alternates: Vec::new(),
+        warnings: Vec::new(),
     }
 }
 

@@ -30,6 +30,7 @@ pub(super) struct Record {
     northernmost: PointRecord,
     southernmost: PointRecord,
     ut1_minus_utc_s: f64,
+    warnings: Vec<String>,
     cautions: Vec<String>,
 }
 
@@ -64,6 +65,7 @@ impl Record {
             northernmost: point(brief, brief.northernmost),
             southernmost: point(brief, brief.southernmost),
             ut1_minus_utc_s: brief.dut1_s,
+            warnings: brief.flight.warnings.clone(),
             cautions: super::caution::cautions(brief),
         }
     }

@@ -10,6 +10,7 @@ mod route;
 
 use super::table::wrapped;
 use crate::Brief;
+use crate::label::one_line;
 use crate::units::Instant;
 
 /// How wide a paragraph is set.
@@ -29,6 +30,7 @@ pub fn text(brief: &Brief) -> String {
         alternates::alternates(brief),
         route::extremes(brief),
         route::circles(brief),
+        warnings(brief),
         cautions(brief),
     ];
     parts.into_iter().filter(|part| !part.is_empty()).collect::<Vec<_>>().join("\n")
@@ -36,6 +38,13 @@ pub fn text(brief: &Brief) -> String {
 
 fn at(brief: &Brief, at_s: f64) -> Instant {
     brief.path.takeoff.after_s(at_s)
+}
+
+/// What was to be said of how the flight was read.
+fn warnings(brief: &Brief) -> String {
+    let told = &brief.flight.warnings;
+    let lines: String = told.iter().map(|warning| wrapped("  - ", &one_line(warning), WIDTH)).collect();
+    if lines.is_empty() { lines } else { format!("Warnings\n{lines}") }
 }
 
 fn cautions(brief: &Brief) -> String {
