@@ -95,6 +95,10 @@ pub(super) struct InlineRequest {
     #[arg(long, value_name = "TIME", requires = "from")]
     pub(super) landing: Option<String>,
 
+    /// Ground speed in knots, instead of the time in the air and the landing
+    #[arg(long, value_name = "KNOTS", requires = "from", allow_hyphen_values = true)]
+    pub(super) ground_speed_kt: Option<f64>,
+
     /// Cruise height in feet
     #[arg(long, value_name = "FEET", requires = "from", allow_hyphen_values = true)]
     pub(super) level_ft: Option<f64>,

@@ -116,6 +116,7 @@ fn flights(request: &BriefRequest, fixes: &Fixes) -> Vec<Result<(Flight, String)
             horizon_ft: inline.horizon_ft,
             climb_ft_min: inline.climb_ft_min,
             descent_ft_min: inline.descent_ft_min,
+            ground_speed_kt: inline.ground_speed_kt,
             route: inline.route.as_deref(),
             fixes: Some(fixes),
         };

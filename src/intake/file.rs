@@ -1,10 +1,12 @@
 //! Flight files: TOML, read value by value so that each error names its line and column.
 
 use super::ahead::{Alternate, air, alternates, low_sun};
+use super::block::GivenBlock;
 use super::draft::{Draft, Given, MOST_WAYPOINTS, Origin};
 use super::fixes::Fixes;
 use super::flight::{Flight, PolarLimits, RoutePoint};
 use super::gazetteer::Gazetteer;
+use super::pace::{GivenPace, ProfilePoint, profile, wind};
 use super::place::{Named, degrees};
 use super::problem::{IntakeError, Problem};
 use super::route::route;
@@ -15,13 +17,22 @@ use toml::Spanned;
 use toml::de::{DeTable, DeValue};
 
 /// What a flight file may hold.
-pub(super) const FIELDS: [&str; 18] = [
+pub(super) const FIELDS: [&str; 27] = [
     "name",
     "from",
     "to",
     "takeoff",
     "landing",
     "airborne",
+    "off_block",
+    "on_block",
+    "taxi_out",
+    "taxi_in",
+    "ground_speed_kt",
+    "true_airspeed_kt",
+    "wind_kt",
+    "profile",
+    "cruise_ft",
     "level_ft",
     "horizon_ft",
     "climb_ft_min",
@@ -36,7 +47,7 @@ pub(super) const FIELDS: [&str; 18] = [
     "alternate",
 ];
 /// What a waypoint may hold.
-pub(super) const WAYPOINT_FIELDS: [&str; 2] = ["at", "time"];
+pub(super) const WAYPOINT_FIELDS: [&str; 3] = ["at", "time", "wind_kt"];
 /// What a place in degrees must hold.
 pub(super) const PLACE_FIELDS: [&str; 2] = ["lat", "lon"];
 /// What the limits of the polar areas may hold.
@@ -111,21 +122,13 @@ impl Reader<'_> {
             from,
             to,
             takeoff: self.time("takeoff", need("takeoff")?)?,
-            airborne_s: table.get("airborne").map(|v| self.duration(v)).transpose()?,
+            airborne_s: self.duration(table, "airborne")?,
             landing: table.get("landing").map(|v| self.time("landing", v)).transpose()?,
-            horizon_ft: table
-                .get("horizon_ft")
-                .map(|v| self.given(v, number("horizon_ft", v)))
-                .transpose()?,
-            climb_ft_min: table
-                .get("climb_ft_min")
-                .map(|v| self.given(v, number("climb_ft_min", v)))
-                .transpose()?,
-            descent_ft_min: table
-                .get("descent_ft_min")
-                .map(|v| self.given(v, number("descent_ft_min", v)))
-                .transpose()?,
-            level_ft: table.get("level_ft").map(|v| self.given(v, number("level_ft", v))).transpose()?,
+            horizon_ft: self.number(table, "horizon_ft")?,
+            climb_ft_min: self.number(table, "climb_ft_min")?,
+            descent_ft_min: self.number(table, "descent_ft_min")?,
+            level_ft: self.number(table, "level_ft")?,
+            cruise_ft: self.number(table, "cruise_ft")?,
             waypoints,
             polar_limits: table.get("polar_areas").map(polar_limits).transpose()?,
             dut1: table.get("dut1_s").map(dut1).transpose()?,
@@ -134,7 +137,38 @@ impl Reader<'_> {
             to_air: table.get("to_air").map(|v| air("to_air", v)).transpose()?,
             alternates,
             warnings: self.names.warnings(),
+            pace: self.pace(table)?,
+            block: self.block(table)?,
         })
+    }
+
+    fn pace(&self, table: &DeTable<'_>) -> Found<GivenPace> {
+        let mut lines = LineCounter { text: self.text, byte: 0, line: 1 };
+        let given = |(value, span): (ProfilePoint, Range<usize>)| Given {
+            value,
+            origin: Origin::At(lines.line_of(span.start), 1),
+        };
+        let points = table.get("profile").map_or(Ok(Vec::new()), profile)?;
+        Ok(GivenPace {
+            ground_speed_kt: self.number(table, "ground_speed_kt")?,
+            true_airspeed_kt: self.number(table, "true_airspeed_kt")?,
+            wind_kt: self.number(table, "wind_kt")?,
+            profile: points.into_iter().map(given).collect(),
+        })
+    }
+
+    fn block(&self, table: &DeTable<'_>) -> Found<GivenBlock> {
+        let time = |field| table.get(field).map(|v| self.time(field, v)).transpose();
+        Ok(GivenBlock {
+            off_block: time("off_block")?,
+            on_block: time("on_block")?,
+            taxi_out_s: self.duration(table, "taxi_out")?,
+            taxi_in_s: self.duration(table, "taxi_in")?,
+        })
+    }
+
+    fn number(&self, table: &DeTable<'_>, field: &'static str) -> Found<Option<Given<f64>>> {
+        table.get(field).map(|value| self.given(value, number(field, value))).transpose()
     }
 
     /// A value with its place in the file.
@@ -186,9 +220,10 @@ impl Reader<'_> {
         self.text.get(span.clone())?.find(text).map(|at| span.start + at)
     }
 
-    fn duration(&self, value: &Value<'_>) -> Found<Given<f64>> {
-        let text = string("airborne", value)?;
-        self.given(value, duration_s(text).map_err(|problem| (value.span(), problem)))
+    fn duration(&self, table: &DeTable<'_>, field: &'static str) -> Found<Option<Given<f64>>> {
+        let Some(value) = table.get(field) else { return Ok(None) };
+        let seconds = duration_s(string(field, value)?).map_err(|problem| (value.span(), problem));
+        self.given(value, seconds).map(Some)
     }
 
     fn alternates(&self, value: &Value<'_>) -> Found<Vec<Given<Alternate>>> {
@@ -217,7 +252,8 @@ impl Reader<'_> {
         let at = table.get("at").ok_or((value.span(), Problem::MissingField("at")))?;
         let named = self.on_route("at", at)?;
         let time = table.get("time").map(|v| time("time", v)).transpose()?;
-        let value = RoutePoint { label: named.label, place: named.place, time };
+        let wind_m_s = table.get("wind_kt").map(wind).transpose()?;
+        let value = RoutePoint { label: named.label, place: named.place, time, wind_m_s };
         Ok(Given { value, origin: Origin::At(lines.line_of(at.span().start), 1) })
     }
 }

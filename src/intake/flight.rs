@@ -1,6 +1,8 @@
 //! A flight as its planner holds it: two ends, two times, perhaps points between.
 
 use super::ahead::{Alternate, LowSunLimits, StationAir};
+use super::block::OnBlock;
+use super::pace::{Pace, ProfilePoint};
 use super::place::Named;
 use crate::places::Aerodrome;
 use crate::units::{Dut1, Instant, Latitude, Metres, Place, PlaceError};
@@ -17,8 +19,16 @@ pub struct Flight {
     pub to: Stop,
     /// Take-off.
     pub takeoff: Instant,
-    /// Landing.
-    pub landing: Instant,
+    /// Landing, where its planner says when; otherwise it follows from the pace.
+    pub landing: Option<Instant>,
+    /// What tells how fast it is flown.
+    pub pace: Pace,
+    /// When it goes off blocks, where known.
+    pub off_block: Option<Instant>,
+    /// When it comes on blocks, where known.
+    pub on_block: Option<OnBlock>,
+    /// Heights and speeds along the way, in order; where there are any, the level is the highest of them.
+    pub profile: Vec<ProfilePoint>,
     /// Cruise height above mean sea level.
     pub level: Option<Metres>,
     /// How fast it climbs to that height and descends from it; without it the height holds from take-off to landing.
@@ -91,6 +101,8 @@ pub struct RoutePoint {
     pub place: Place,
     /// When it is passed, if the planner says so.
     pub time: Option<Instant>,
+    /// The tailwind on the leg that ends here, in metres a second, where the flight is flown at an airspeed.
+    pub wind_m_s: Option<f64>,
 }
 
 /// Where the polar areas begin.

@@ -11,14 +11,18 @@ mod fixes;
 mod gazetteer;
 mod route;
 mod time;
+mod pace;
+mod block;
 mod draft;
 mod file;
 mod inline;
 
 pub use ahead::{Alternate, LowSunLimits, StationAir};
+pub use block::OnBlock;
 pub use draft::Origin;
 pub use file::{flight_file, flight_file_with_fixes};
 pub use fixes::Fixes;
 pub use flight::{ClimbRates, Flight, PolarLimits, RoutePoint, Stop};
 pub use inline::{Inline, date_argument, inline_flight, instant_argument, place_argument};
+pub use pace::{Mark, Pace, ProfilePoint};
 pub use problem::{IntakeError, Problem};

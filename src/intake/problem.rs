@@ -3,11 +3,15 @@
 use super::ahead::{AIR_FIELDS, ALTERNATE_FIELDS, LOW_SUN_FIELDS};
 use super::draft::Origin;
 use super::file::{FIELDS, PLACE_FIELDS, POLAR_FIELDS, WAYPOINT_FIELDS};
+use super::pace::PROFILE_FIELDS;
 use crate::places::UnknownAerodrome;
 use crate::units::{Dut1Error, PlaceError, YEARS};
 
 /// What was given is quoted up to this length.
 const LONGEST_QUOTED: usize = 40;
+
+/// A value, or what is wrong with it and where that stands.
+pub(super) type Stands<T> = Result<T, (Origin, Problem)>;
 
 /// Something is wrong with a flight as it was given.
 #[derive(Debug, Clone, PartialEq, thiserror::Error)]
@@ -106,6 +110,64 @@ pub enum Problem {
         one: &'static str,
         /// The other.
         other: &'static str,
+    },
+    /// More points than a profile holds.
+    #[error("{count} profile points are more than the {most} that a flight file may have")]
+    LongProfile {
+        /// How many there are.
+        count: usize,
+        /// How many there may be.
+        most: usize,
+    },
+    /// A profile that goes back.
+    #[error("profile point {number} does not lie after the one before it")]
+    ProfileOrder {
+        /// Counted from 1.
+        number: usize,
+    },
+    /// A profile that gives speeds, but none for its beginning.
+    #[error("the profile gives a speed from here on, but none from take-off")]
+    NoFirstSpeed,
+    /// A wind without an airspeed.
+    #[error("a wind stands without 'true_airspeed_kt'")]
+    WindAlone,
+    /// A headwind that no speed is left of.
+    #[error("airspeed and wind leave a ground speed of {speed_kt:.0} kt, below 10 kt")]
+    NoHeadway {
+        /// Knots.
+        speed_kt: f64,
+    },
+    /// A waypoint's time beside speeds.
+    #[error("waypoint {number} ({label}) has a time, though speeds tell when it is passed")]
+    TimeAndSpeed {
+        /// Counted from 1.
+        number: usize,
+        /// As given.
+        label: String,
+    },
+    /// Off blocks after take-off.
+    #[error("off blocks at {off} is after the take-off at {takeoff}")]
+    OffBlockLate {
+        /// RFC 3339.
+        off: String,
+        /// RFC 3339.
+        takeoff: String,
+    },
+    /// On blocks before landing.
+    #[error("on blocks at {on} is before the landing at {landing}")]
+    OnBlockEarly {
+        /// RFC 3339.
+        on: String,
+        /// RFC 3339.
+        landing: String,
+    },
+    /// A taxi longer than any.
+    #[error("{hours:.1} h between blocks and runway is outside 0 h to {longest} h")]
+    LongTaxi {
+        /// Hours.
+        hours: f64,
+        /// The longest that is taken.
+        longest: f64,
     },
     /// A code that is not known.
     #[error(transparent)]
@@ -265,6 +327,11 @@ impl Problem {
             Self::UnknownField(field) => return near_field(field),
             Self::Landing(_) => "give one of airborne = \"14h55m\" and landing = 2026-12-18T20:05:00Z",
             Self::HalfAClimb => "give level_ft, climb_ft_min and descent_ft_min together",
+            Self::NoFirstSpeed => {
+                "give ground_speed_kt for the whole flight too, or a point with at = \"0m\""
+            }
+            Self::WindAlone => "give true_airspeed_kt; a ground speed has its wind in it",
+            Self::TimeAndSpeed { .. } => "leave the time out, or the speeds",
             Self::SeveralFixes { .. } => "give its coordinates instead",
             Self::FixNumber(_) => "write decimal degrees, such as 78.5 and -20",
             Self::Swapped { .. } => "a row without a header is name, latitude, longitude",
@@ -294,6 +361,7 @@ fn near_field(field: &str) -> Option<String> {
         &LOW_SUN_FIELDS,
         &AIR_FIELDS,
         &ALTERNATE_FIELDS,
+        &PROFILE_FIELDS,
     ]
     .concat();
     let lower = field.to_ascii_lowercase();

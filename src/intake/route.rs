@@ -30,7 +30,8 @@ pub(super) fn route(text: &str, gazetteer: &Gazetteer<'_>) -> Found<Vec<(RoutePo
             return Err((span, Problem::TooManyWaypoints { count: words.len(), most: MOST_WAYPOINTS }));
         }
         let found = gazetteer.next(given).map_err(|problem| (span.clone(), problem))?;
-        points.push((RoutePoint { label: found.label, place: found.place, time: None }, span));
+        points
+            .push((RoutePoint { label: found.label, place: found.place, time: None, wind_m_s: None }, span));
     }
     if points.is_empty() { Err((0..text.len(), Problem::EmptyRoute)) } else { Ok(points) }
 }

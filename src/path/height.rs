@@ -28,6 +28,11 @@ impl Heights {
         Self { points: vec![(0.0, height.0), (airborne_s, height.0)] }
     }
 
+    /// Straight between points of seconds and metres, the first at take-off, the last at landing, times rising.
+    pub(super) fn through(points: Vec<(f64, f64)>) -> Self {
+        Self { points }
+    }
+
     /// Up at one rate, along, and down at the other; a flight too short for its level turns where both lines meet.
     pub(super) fn climbing(climb: Climb, airborne_s: f64) -> Self {
         let Climb { from_m, level_m, to_m, rates_m_s: (up, down) } = climb;

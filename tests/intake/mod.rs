@@ -3,6 +3,8 @@
 mod notation;
 mod route;
 mod fixes;
+mod profile;
+mod block;
 
 /// A flight that wants nothing more.
 const FLIGHT: &str =
