@@ -21,7 +21,7 @@ use crate::light::{
 };
 use crate::path::{CircleCrossing, FlightError, Passed, Path, circles, fly};
 use crate::sky::Sky;
-use crate::units::Angle;
+use crate::units::{Angle, Instant};
 
 /// Seconds between the rows of a brief's table.
 const STEP_S: f64 = 60.0;
@@ -145,6 +145,11 @@ impl Brief {
     /// The Sun at take-off.
     pub fn at_takeoff(&self) -> &Sample {
         &self.minutes[0]
+    }
+
+    /// When it comes on blocks, where known.
+    pub fn on_block(&self) -> Option<Instant> {
+        self.flight.on_block.map(|on| on.after(self.path.landing()))
     }
 
     /// The Sun at landing.

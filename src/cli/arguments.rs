@@ -43,6 +43,10 @@ pub(super) struct BriefRequest {
     #[command(flatten)]
     pub(super) inline: InlineRequest,
 
+    /// Your own points (CSV: name, lat, lon), for names in flights that are neither codes nor coordinates
+    #[arg(long, value_name = "FIXES.csv")]
+    pub(super) fixes: Option<PathBuf>,
+
     /// What goes to standard output
     #[arg(long = "as", value_enum, default_value_t = Form::Text, value_name = "FORM")]
     pub(super) form: Form,
@@ -91,6 +95,10 @@ pub(super) struct InlineRequest {
     #[arg(long, value_name = "PLACE", requires = "from", allow_hyphen_values = true)]
     pub(super) to: Option<String>,
 
+    /// Points between, parted by blanks: "7030N06000W 78N040W CYFB"
+    #[arg(long, value_name = "POINTS", requires = "from", allow_hyphen_values = true)]
+    pub(super) route: Option<String>,
+
     /// Take-off time, such as 2026-12-18T05:10Z
     #[arg(long, value_name = "TIME", requires = "from")]
     pub(super) takeoff: Option<String>,
@@ -102,6 +110,10 @@ pub(super) struct InlineRequest {
     /// Landing time, instead of the time in the air
     #[arg(long, value_name = "TIME", requires = "from")]
     pub(super) landing: Option<String>,
+
+    /// Ground speed in knots, instead of the time in the air and the landing
+    #[arg(long, value_name = "KNOTS", requires = "from", allow_hyphen_values = true)]
+    pub(super) ground_speed_kt: Option<f64>,
 
     /// Cruise height in feet
     #[arg(long, value_name = "FEET", requires = "from", allow_hyphen_values = true)]

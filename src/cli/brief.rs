@@ -3,10 +3,11 @@
 use super::Outcome;
 use super::arguments::{BriefRequest, Form};
 use super::files::{self, Batch, FileError};
+use super::fixes;
 use super::terminal;
 use gloamline::intake::{
-    BrightnessError, Columns, Flight, Inline, InputKind, IntakeError, Origin, PolarLimits, Problem,
-    TrackOptions, date_argument, flight_file, inline_flight, kind_of, lux_levels, plain, tracks,
+    BrightnessError, Columns, Fixes, Flight, Inline, InputKind, IntakeError, Origin, PolarLimits, Problem,
+    TrackOptions, date_argument, flight_file_with_fixes, inline_flight, kind_of, lux_levels, plain, tracks,
 };
 use gloamline::sky::Sky;
 use gloamline::units::{Dut1, Dut1Error, PlaceError};
@@ -39,11 +40,12 @@ struct Common {
     sky: Sky,
     polar_limits: Option<PolarLimits>,
     levels_lux: Option<Vec<f64>>,
+    fixes: Fixes,
 }
 
 /// Briefs every flight asked for; a bad one does not keep the others back.
 pub(super) fn run(request: &BriefRequest) -> Outcome {
-    let common = match common(request) {
+    let mut common = match common(request) {
         Ok(common) => common,
         Err(problem) => {
             terminal::complain(&problem, None);
@@ -51,7 +53,16 @@ pub(super) fn run(request: &BriefRequest) -> Outcome {
         }
     };
     let (mut briefs, mut refused) = (Vec::new(), 0);
-    for flight in flights(request) {
+    if let Some(path) = &request.fixes {
+        match fixes::read(path) {
+            Ok((fixes, bad)) => (common.fixes, refused) = (fixes, bad),
+            Err(problem) => {
+                terminal::complain(&problem, None);
+                return Outcome::Failed;
+            }
+        }
+    }
+    for flight in flights(request, &common.fixes) {
         match flight.and_then(|(flight, source)| briefed(flight, &source, &common)) {
             Ok(brief) => briefs.push(brief),
             Err(refusal) => {
@@ -92,11 +103,11 @@ fn common(request: &BriefRequest) -> Result<Common, OptionError> {
     let south = request.south_polar_area.unwrap_or(-usual.south.deg());
     let polar_limits = if given { Some(PolarLimits::from_deg(north, south)?) } else { None };
     let levels_lux = request.lux_levels.clone().map(lux_levels).transpose()?;
-    Ok(Common { dut1, sky: Sky::new(dut1), polar_limits, levels_lux })
+    Ok(Common { dut1, sky: Sky::new(dut1), polar_limits, levels_lux, fixes: Fixes::default() })
 }
 
 /// Each flight with the name of its source, read one at a time.
-fn flights(request: &BriefRequest) -> Vec<Result<(Flight, String), Refusal>> {
+fn flights(request: &BriefRequest, fixes: &Fixes) -> Vec<Result<(Flight, String), Refusal>> {
     let inline = &request.inline;
     if let Some(from) = &inline.from {
         let given = Inline {
@@ -110,16 +121,22 @@ fn flights(request: &BriefRequest) -> Vec<Result<(Flight, String), Refusal>> {
             horizon_ft: inline.horizon_ft,
             climb_ft_min: inline.climb_ft_min,
             descent_ft_min: inline.descent_ft_min,
+            ground_speed_kt: inline.ground_speed_kt,
+            route: inline.route.as_deref(),
+            fixes: Some(fixes),
         };
         return vec![
             inline_flight(&given).map(|flight| (flight, "the flight".to_string())).map_err(Refusal::from),
         ];
     }
-    request.files.iter().flat_map(|path| read_flights(path, request)).collect()
+    request.files.iter().flat_map(|path| read_flights(path, (request, fixes))).collect()
 }
 
 /// The flights of a file: one of a flight file, or all of a recording, the kind told by content and ending.
-fn read_flights(path: &Path, request: &BriefRequest) -> Vec<Result<(Flight, String), Refusal>> {
+fn read_flights(
+    path: &Path,
+    (request, fixes): (&BriefRequest, &Fixes),
+) -> Vec<Result<(Flight, String), Refusal>> {
     let source_name = files::source_name(path);
     let bytes = match files::read(path) {
         Ok(bytes) => bytes,
@@ -127,13 +144,17 @@ fn read_flights(path: &Path, request: &BriefRequest) -> Vec<Result<(Flight, Stri
     };
     match kind_of(&bytes, &source_name) {
         None | Some(InputKind::Flight) => {
-            vec![planned(&bytes, &source_name).map(|flight| (flight, source_name)).map_err(Refusal::from)]
+            vec![
+                planned(&bytes, &source_name, fixes)
+                    .map(|flight| (flight, source_name))
+                    .map_err(Refusal::from),
+            ]
         }
         Some(_) => recorded(&bytes, &source_name, request),
     }
 }
 
-fn planned(bytes: &[u8], source_name: &str) -> Result<Flight, IntakeError> {
+fn planned(bytes: &[u8], source_name: &str, fixes: &Fixes) -> Result<Flight, IntakeError> {
     let bytes = plain(bytes, source_name)?;
     let text = std::str::from_utf8(&bytes).map_err(|error| IntakeError {
         source_name: source_name.to_string(),
@@ -141,7 +162,7 @@ fn planned(bytes: &[u8], source_name: &str) -> Result<Flight, IntakeError> {
         problem: Problem::NotText(error.valid_up_to()),
     })?;
     // a byte-order mark says nothing that UTF-8 does not
-    flight_file(text.trim_start_matches('\u{feff}'), source_name)
+    flight_file_with_fixes(text.trim_start_matches('\u{feff}'), source_name, fixes)
 }
 
 /// A recording's flights, with the refusals of those that cannot be used.

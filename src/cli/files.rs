@@ -1,6 +1,6 @@
 //! The only place that opens and writes files.
 
-use std::io::{Read, Write};
+use std::io::{BufRead, BufReader, Read, Write};
 use std::path::{Path, PathBuf};
 use tempfile::NamedTempFile;
 
@@ -37,6 +37,29 @@ pub(super) fn read(path: &Path) -> Result<Vec<u8>, FileError> {
         Err(FileError::TooLong { source_name: source_name(path) })
     } else {
         Ok(bytes)
+    }
+}
+
+/// The longest line of a file that is read line by line.
+const LONGEST_LINE: u64 = 64 << 10;
+
+/// Gives a file's lines one after another, so that a long file needs no room; a line that is too long, or no text, is
+/// given as nothing.
+pub(super) fn each_line(path: &Path, mut take: impl FnMut(Option<&str>)) -> Result<(), FileError> {
+    let fail = |source| FileError::Read { source_name: source_name(path), source };
+    let mut reader = BufReader::new(std::fs::File::open(path).map_err(fail)?);
+    let mut bytes = Vec::new();
+    loop {
+        bytes.clear();
+        let read = (&mut reader).take(LONGEST_LINE).read_until(b'\n', &mut bytes).map_err(fail)?;
+        if read == 0 {
+            return Ok(());
+        }
+        if bytes.last() != Some(&b'\n') && read as u64 == LONGEST_LINE {
+            reader.skip_until(b'\n').map_err(fail)?;
+            bytes.push(0xff);
+        }
+        take(std::str::from_utf8(&bytes).ok().map(|text| text.trim_end_matches(['\r', '\n'])));
     }
 }
 

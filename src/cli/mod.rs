@@ -4,6 +4,7 @@ mod aerodrome;
 mod arguments;
 mod brief;
 mod files;
+mod fixes;
 mod sun;
 mod terminal;
 

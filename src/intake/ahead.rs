@@ -4,6 +4,7 @@
 
 use super::file::{Found, Value, named, number, only, string, table, wrong};
 use super::flight::Stop;
+use super::gazetteer::Gazetteer;
 use super::problem::Problem;
 use super::time::duration_s;
 use crate::units::Angle;
@@ -102,7 +103,7 @@ pub(super) fn air(field: &'static str, value: &Value<'_>) -> Found<StationAir> {
 }
 
 /// Each alternate with the bytes it stands on.
-pub(super) fn alternates(value: &Value<'_>) -> Found<Vec<(Alternate, Range<usize>)>> {
+pub(super) fn alternates(value: &Value<'_>, names: &Gazetteer<'_>) -> Found<Vec<(Alternate, Range<usize>)>> {
     let Some(list) = value.get_ref().as_array() else {
         return Err(wrong("alternate", value.get_ref(), "written as [[alternate]]", value.span()));
     };
@@ -110,14 +111,14 @@ pub(super) fn alternates(value: &Value<'_>) -> Found<Vec<(Alternate, Range<usize
         let problem = Problem::TooManyAlternates { count: list.len(), most: MOST_ALTERNATES };
         return Err((value.span(), problem));
     }
-    list.iter().map(|value| Ok((alternate(value)?, value.span()))).collect()
+    list.iter().map(|value| Ok((alternate(value, names)?, value.span()))).collect()
 }
 
-fn alternate(value: &Value<'_>) -> Found<Alternate> {
+fn alternate(value: &Value<'_>, names: &Gazetteer<'_>) -> Found<Alternate> {
     let table = table("alternate", value)?;
     only(table, &ALTERNATE_FIELDS)?;
     let at = table.get("at").ok_or((value.span(), Problem::MissingField("at")))?;
-    let stop = Stop::from(named("at", at)?);
+    let stop = Stop::from(named("at", at, |text| names.find(text))?);
     let Some(after) = table.get("after") else { return Ok(Alternate { stop, after_s: 0.0 }) };
     let after_s = duration_s(string("after", after)?).map_err(|problem| (after.span(), problem))?;
     if after_s > LONGEST_AFTER_S {

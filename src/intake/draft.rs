@@ -1,10 +1,12 @@
 //! A flight as given, each value with where it stands, and the checks that make it a [`Flight`].
 
 use super::ahead::{Alternate, LowSunLimits, StationAir};
+use super::block::GivenBlock;
 use super::brightness::Brightness;
 use super::flight::{ClimbRates, Flight, PolarLimits, RoutePoint, Stop};
+use super::pace::{GivenPace, Pace};
 use super::place::Named;
-use super::problem::{IntakeError, Problem};
+use super::problem::{IntakeError, Problem, Stands};
 use crate::units::{Dut1, Instant, Metres};
 use std::ops::RangeInclusive;
 
@@ -58,6 +60,7 @@ pub(super) struct Draft {
     pub(super) airborne_s: Option<Given<f64>>,
     pub(super) landing: Option<Given<Instant>>,
     pub(super) level_ft: Option<Given<f64>>,
+    pub(super) cruise_ft: Option<Given<f64>>,
     pub(super) horizon_ft: Option<Given<f64>>,
     pub(super) climb_ft_min: Option<Given<f64>>,
     pub(super) descent_ft_min: Option<Given<f64>>,
@@ -69,6 +72,9 @@ pub(super) struct Draft {
     pub(super) from_air: Option<StationAir>,
     pub(super) to_air: Option<StationAir>,
     pub(super) alternates: Vec<Given<Alternate>>,
+    pub(super) warnings: Vec<String>,
+    pub(super) pace: GivenPace,
+    pub(super) block: GivenBlock,
 }
 
 /// RFC 3339 in UTC to the second, for messages.
@@ -80,35 +86,39 @@ impl Draft {
     /// Holds the values against each other.
     pub(super) fn checked(self) -> Result<Flight, IntakeError> {
         let source_name = self.source_name.clone();
-        let fail = |origin: &Origin, problem| IntakeError {
-            source_name: source_name.clone(),
-            origin: origin.clone(),
-            problem,
-        };
+        self.held().map_err(|(origin, problem)| IntakeError { source_name, origin, problem })
+    }
+
+    fn held(self) -> Stands<Flight> {
         let takeoff = self.takeoff.value;
-        let landing = self.landing().map_err(|(origin, problem)| fail(&origin, problem))?;
-        check_duration(takeoff, landing.value).map_err(|problem| fail(&landing.origin, problem))?;
-        let (level, horizon) = (height(self.level_ft, LEVELS_FT), height(self.horizon_ft, HORIZONS_FT));
-        let level = level.map_err(|(origin, ft)| fail(&origin, Problem::Level(ft)))?;
-        let horizon = horizon.map_err(|(origin, ft)| fail(&origin, Problem::Horizon(ft)))?;
-        let rates = climb_rates(level.is_some(), self.climb_ft_min, self.descent_ft_min);
-        let climb = rates.map_err(|(origin, problem)| fail(&origin, problem))?;
-        check_order(&self.waypoints, takeoff, landing.value)
-            .map_err(|(origin, problem)| fail(&origin, problem))?;
-        check_alternates(&self.alternates, landing.value)
-            .map_err(|(origin, problem)| fail(&origin, problem))?;
-        let name = self.name.filter(|name| name.chars().any(|c| !c.is_whitespace() && !c.is_control()));
+        let pace = self.pace.checked(&self.waypoints)?;
+        let landing = self.landing(pace)?;
+        let landing_at = landing.as_ref().map(|landing| landing.value);
+        if let Some(landing) = &landing {
+            check_duration(takeoff, landing.value).map_err(|problem| (landing.origin.clone(), problem))?;
+        }
+        let off_block = self.block.off(takeoff)?;
+        let on_block = self.block.on(landing_at)?;
+        let level = self.level()?;
+        let horizon = height(self.horizon_ft, HORIZONS_FT);
+        let horizon = horizon.map_err(|(origin, ft)| (origin, Problem::Horizon(ft)))?;
+        let climb = climb_rates(level.is_some(), self.climb_ft_min, self.descent_ft_min)?;
+        check_order(&self.waypoints, takeoff, landing_at)?;
+        check_alternates(&self.alternates, landing_at)?;
         let (from, to) = (Stop::from(self.from), Stop::from(self.to));
-        let name = name.unwrap_or_else(|| {
-            format!("{}-{} {}", from.label, to.label, takeoff.utc().format("%Y-%m-%d %H%MZ"))
-        });
+        let profile: Vec<_> = self.pace.profile.into_iter().map(|point| point.value).collect();
+        let highest = profile.iter().map(|point| point.level).reduce(|a, b| if b > a { b } else { a });
         Ok(Flight {
-            name,
+            name: named(self.name, (&from, &to), takeoff),
             from,
             to,
             takeoff,
-            landing: landing.value,
-            level,
+            landing: landing_at,
+            pace,
+            off_block,
+            on_block,
+            level: highest.or(level),
+            profile,
             climb,
             horizon,
             waypoints: self.waypoints.into_iter().map(|w| w.value).collect(),
@@ -120,23 +130,46 @@ impl Draft {
             from_air: self.from_air,
             to_air: self.to_air,
             alternates: self.alternates.into_iter().map(|a| a.value).collect(),
+            warnings: self.warnings,
         })
     }
 
-    /// The landing, from whichever of its two forms was given.
-    fn landing(&self) -> Result<Given<Instant>, (Origin, Problem)> {
+    /// The cruise height under either of its names; a profile has heights of its own.
+    fn level(&self) -> Stands<Option<Metres>> {
+        let given = [
+            ("level_ft", &self.level_ft),
+            ("cruise_ft", &self.cruise_ft),
+            ("climb_ft_min", &self.climb_ft_min),
+            ("descent_ft_min", &self.descent_ft_min),
+        ];
+        let other = given.iter().find_map(|(field, given)| Some((*field, given.as_ref()?)));
+        match (other, &self.level_ft, &self.cruise_ft) {
+            (Some((one, value)), ..) if !self.pace.profile.is_empty() => {
+                Err((value.origin.clone(), Problem::Exclusive { one, other: "profile" }))
+            }
+            (_, Some(_), Some(cruise)) => {
+                Err((cruise.origin.clone(), Problem::Exclusive { one: "level_ft", other: "cruise_ft" }))
+            }
+            (_, level, cruise) => height(level.clone().or(cruise.clone()), LEVELS_FT)
+                .map_err(|(origin, ft)| (origin, Problem::Level(ft))),
+        }
+    }
+
+    /// The landing, from whichever of its two forms was given; speeds may stand for both.
+    fn landing(&self, pace: Pace) -> Stands<Option<Given<Instant>>> {
         let by_airborne = self.airborne_s.as_ref().map(|airborne| Given {
             value: self.takeoff.value.after_s(airborne.value),
             origin: airborne.origin.clone(),
         });
         match (by_airborne, self.landing.clone()) {
+            (None, None) if pace != Pace::Times => Ok(None),
             (None, None) => Err((
                 Origin::Whole,
                 Problem::Landing("neither 'airborne' nor 'landing' says when the flight ends"),
             )),
-            (Some(one), None) | (None, Some(one)) => Ok(one),
+            (Some(one), None) | (None, Some(one)) => Ok(Some(one)),
             // to the second, as both may have been rounded
-            (Some(a), Some(b)) if a.value.since_s(b.value).abs() <= 1.0 => Ok(b),
+            (Some(a), Some(b)) if a.value.since_s(b.value).abs() <= 1.0 => Ok(Some(b)),
             (Some(a), Some(b)) => {
                 let conflict =
                     Problem::LandingConflict { by_airborne: said(a.value), by_landing: said(b.value) };
@@ -144,6 +177,12 @@ impl Draft {
             }
         }
     }
+}
+
+/// The flight's name, or its ends and its take-off where it has none.
+fn named(name: Option<String>, (from, to): (&Stop, &Stop), takeoff: Instant) -> String {
+    let name = name.filter(|name| name.chars().any(|c| !c.is_whitespace() && !c.is_control()));
+    name.unwrap_or_else(|| format!("{}-{} {}", from.label, to.label, takeoff.utc().format("%Y-%m-%d %H%MZ")))
 }
 
 /// A height in feet within its range, or the value that is not, with where it stands.
@@ -159,18 +198,15 @@ fn climb_rates(
     has_level: bool,
     climb: Option<Given<f64>>,
     descent: Option<Given<f64>>,
-) -> Result<Option<ClimbRates>, (Origin, Problem)> {
+) -> Stands<Option<ClimbRates>> {
     let (climb, descent) = match (climb, descent) {
         (None, None) => return Ok(None),
         (Some(climb), Some(descent)) if has_level => (climb, descent),
         (Some(rate), _) | (_, Some(rate)) => return Err((rate.origin, Problem::HalfAClimb)),
     };
     let metres = |rate: &Given<f64>| {
-        if RATES_FT_MIN.contains(&rate.value) {
-            Ok(Metres::from_feet(rate.value))
-        } else {
-            Err((rate.origin.clone(), Problem::ClimbRate(rate.value)))
-        }
+        let possible = RATES_FT_MIN.contains(&rate.value).then(|| Metres::from_feet(rate.value));
+        possible.ok_or_else(|| (rate.origin.clone(), Problem::ClimbRate(rate.value)))
     };
     Ok(Some(ClimbRates { climb: metres(&climb)?, descent: metres(&descent)? }))
 }
@@ -187,7 +223,8 @@ fn check_duration(takeoff: Instant, landing: Instant) -> Result<(), Problem> {
 }
 
 /// No alternate is used after the years served.
-fn check_alternates(alternates: &[Given<Alternate>], landing: Instant) -> Result<(), (Origin, Problem)> {
+fn check_alternates(alternates: &[Given<Alternate>], landing: Option<Instant>) -> Stands<()> {
+    let Some(landing) = landing else { return Ok(()) };
     for alternate in alternates {
         let latest = landing.after_s(alternate.value.after_s);
         if !latest.is_answered_for() {
@@ -198,11 +235,7 @@ fn check_alternates(alternates: &[Given<Alternate>], landing: Instant) -> Result
 }
 
 /// Waypoint times rise strictly from take-off to landing.
-fn check_order(
-    waypoints: &[Given<RoutePoint>],
-    takeoff: Instant,
-    landing: Instant,
-) -> Result<(), (Origin, Problem)> {
+fn check_order(waypoints: &[Given<RoutePoint>], takeoff: Instant, landing: Option<Instant>) -> Stands<()> {
     let (mut last, mut before) = (takeoff, format!("the take-off at {}", said(takeoff)));
     for (i, point) in waypoints.iter().enumerate() {
         let Some(time) = point.value.time else { continue };
@@ -211,7 +244,7 @@ fn check_order(
             let problem = Problem::OutOfOrder { number, label, time: said(time), before };
             return Err((point.origin.clone(), problem));
         }
-        if time >= landing {
+        if let Some(landing) = landing.filter(|&landing| time >= landing) {
             let problem = Problem::AfterLanding { number, label, time: said(time), landing: said(landing) };
             return Err((point.origin.clone(), problem));
         }

@@ -1,11 +1,16 @@
 //! Flight files: TOML, read value by value so that each error names its line and column.
 
 use super::ahead::{Alternate, air, alternates, low_sun};
+use super::block::GivenBlock;
 use super::brightness::{Brightness, lux_levels, share};
 use super::draft::{Draft, Given, MOST_WAYPOINTS, Origin};
+use super::fixes::Fixes;
 use super::flight::{Flight, PolarLimits, RoutePoint};
-use super::place::{Named, degrees, place};
+use super::gazetteer::Gazetteer;
+use super::pace::{GivenPace, ProfilePoint, profile, wind};
+use super::place::{Named, degrees};
 use super::problem::{IntakeError, Problem};
+use super::route::route;
 use super::time::{duration_s, instant};
 use crate::units::{Dut1, Instant};
 use std::ops::Range;
@@ -13,18 +18,28 @@ use toml::Spanned;
 use toml::de::{DeTable, DeValue};
 
 /// What a flight file may hold.
-pub(super) const FIELDS: [&str; 20] = [
+pub(super) const FIELDS: [&str; 30] = [
     "name",
     "from",
     "to",
     "takeoff",
     "landing",
     "airborne",
+    "off_block",
+    "on_block",
+    "taxi_out",
+    "taxi_in",
+    "ground_speed_kt",
+    "true_airspeed_kt",
+    "wind_kt",
+    "profile",
+    "cruise_ft",
     "level_ft",
     "horizon_ft",
     "climb_ft_min",
     "descent_ft_min",
     "dut1_s",
+    "route",
     "waypoint",
     "polar_areas",
     "lux_levels",
@@ -36,7 +51,7 @@ pub(super) const FIELDS: [&str; 20] = [
     "alternate",
 ];
 /// What a waypoint may hold.
-pub(super) const WAYPOINT_FIELDS: [&str; 2] = ["at", "time"];
+pub(super) const WAYPOINT_FIELDS: [&str; 3] = ["at", "time", "wind_kt"];
 /// What a place in degrees must hold.
 pub(super) const PLACE_FIELDS: [&str; 2] = ["lat", "lon"];
 /// What the limits of the polar areas may hold.
@@ -51,6 +66,18 @@ pub(super) type Value<'a> = Spanned<DeValue<'a>>;
 /// # Errors
 /// Anything that keeps the flight from being flown, with the line and column it stands on.
 pub fn flight_file(text: &str, source_name: &str) -> Result<Flight, IntakeError> {
+    read(text, source_name, None)
+}
+
+/// Reads a flight file's text; a place that is neither code nor coordinates is looked for among a user's own fixes.
+///
+/// # Errors
+/// As for [`flight_file`].
+pub fn flight_file_with_fixes(text: &str, source_name: &str, fixes: &Fixes) -> Result<Flight, IntakeError> {
+    read(text, source_name, Some(fixes))
+}
+
+fn read(text: &str, source_name: &str, fixes: Option<&Fixes>) -> Result<Flight, IntakeError> {
     let fail = |origin, problem| IntakeError { source_name: source_name.to_string(), origin, problem };
     if text.trim().is_empty() {
         return Err(fail(Origin::Whole, Problem::Empty));
@@ -63,7 +90,7 @@ pub fn flight_file(text: &str, source_name: &str) -> Result<Flight, IntakeError>
         let origin = error.span().map_or(Origin::Whole, |span| line_and_column(text, span.start));
         fail(origin, Problem::Toml(error.message().replace('\n', ", ")))
     })?;
-    let reader = Reader { text };
+    let reader = Reader { text, names: Gazetteer::new(fixes) };
     let draft = reader.draft(parsed.get_ref(), source_name).map_err(|(span, problem)| {
         // a field that is missing stands nowhere
         let missing = matches!(problem, Problem::MissingField(_)) && span.is_empty();
@@ -81,42 +108,72 @@ pub(super) fn line_and_column(text: &str, byte: usize) -> Origin {
 
 struct Reader<'t> {
     text: &'t str,
+    names: Gazetteer<'t>,
 }
 
 impl Reader<'_> {
     fn draft(&self, table: &DeTable<'_>, source_name: &str) -> Found<Draft> {
         only(table, &FIELDS)?;
         let need = |field: &'static str| table.get(field).ok_or((0..0, Problem::MissingField(field)));
+        // in the order of the route, so that a fix is looked for near the point before it
+        let from = self.on_route("from", need("from")?)?;
+        let waypoints = self.between(table)?;
+        let to = self.on_route("to", need("to")?)?;
+        let alternates = table.get("alternate").map_or(Ok(Vec::new()), |v| self.alternates(v))?;
         Ok(Draft {
             source_name: source_name.to_string(),
             name: table.get("name").map(|v| string("name", v).map(str::to_string)).transpose()?,
-            from: named("from", need("from")?)?,
-            to: named("to", need("to")?)?,
+            from,
+            to,
             takeoff: self.time("takeoff", need("takeoff")?)?,
-            airborne_s: table.get("airborne").map(|v| self.duration(v)).transpose()?,
+            airborne_s: self.duration(table, "airborne")?,
             landing: table.get("landing").map(|v| self.time("landing", v)).transpose()?,
-            horizon_ft: table
-                .get("horizon_ft")
-                .map(|v| self.given(v, number("horizon_ft", v)))
-                .transpose()?,
-            climb_ft_min: table
-                .get("climb_ft_min")
-                .map(|v| self.given(v, number("climb_ft_min", v)))
-                .transpose()?,
-            descent_ft_min: table
-                .get("descent_ft_min")
-                .map(|v| self.given(v, number("descent_ft_min", v)))
-                .transpose()?,
-            level_ft: table.get("level_ft").map(|v| self.given(v, number("level_ft", v))).transpose()?,
-            waypoints: table.get("waypoint").map_or(Ok(Vec::new()), |v| self.waypoints(v))?,
+            horizon_ft: self.number(table, "horizon_ft")?,
+            climb_ft_min: self.number(table, "climb_ft_min")?,
+            descent_ft_min: self.number(table, "descent_ft_min")?,
+            level_ft: self.number(table, "level_ft")?,
+            cruise_ft: self.number(table, "cruise_ft")?,
+            waypoints,
             polar_limits: table.get("polar_areas").map(polar_limits).transpose()?,
             dut1: table.get("dut1_s").map(dut1).transpose()?,
             brightness: brightness(table)?,
             low_sun: table.get("low_sun").map(low_sun).transpose()?,
             from_air: table.get("from_air").map(|v| air("from_air", v)).transpose()?,
             to_air: table.get("to_air").map(|v| air("to_air", v)).transpose()?,
-            alternates: table.get("alternate").map_or(Ok(Vec::new()), |v| self.alternates(v))?,
+            alternates,
+            warnings: self.names.warnings(),
+            pace: self.pace(table)?,
+            block: self.block(table)?,
         })
+    }
+
+    fn pace(&self, table: &DeTable<'_>) -> Found<GivenPace> {
+        let mut lines = LineCounter { text: self.text, byte: 0, line: 1 };
+        let given = |(value, span): (ProfilePoint, Range<usize>)| Given {
+            value,
+            origin: Origin::At(lines.line_of(span.start), 1),
+        };
+        let points = table.get("profile").map_or(Ok(Vec::new()), profile)?;
+        Ok(GivenPace {
+            ground_speed_kt: self.number(table, "ground_speed_kt")?,
+            true_airspeed_kt: self.number(table, "true_airspeed_kt")?,
+            wind_kt: self.number(table, "wind_kt")?,
+            profile: points.into_iter().map(given).collect(),
+        })
+    }
+
+    fn block(&self, table: &DeTable<'_>) -> Found<GivenBlock> {
+        let time = |field| table.get(field).map(|v| self.time(field, v)).transpose();
+        Ok(GivenBlock {
+            off_block: time("off_block")?,
+            on_block: time("on_block")?,
+            taxi_out_s: self.duration(table, "taxi_out")?,
+            taxi_in_s: self.duration(table, "taxi_in")?,
+        })
+    }
+
+    fn number(&self, table: &DeTable<'_>, field: &'static str) -> Found<Option<Given<f64>>> {
+        table.get(field).map(|value| self.given(value, number(field, value))).transpose()
     }
 
     /// A value with its place in the file.
@@ -125,17 +182,53 @@ impl Reader<'_> {
     }
 
     fn time(&self, field: &'static str, value: &Value<'_>) -> Found<Given<Instant>> {
-        let text = match value.get_ref() {
-            DeValue::Datetime(datetime) => datetime.to_string(),
-            DeValue::String(text) => text.to_string(),
-            other => return Err(wrong(field, other, "a date and time with an offset", value.span())),
-        };
-        self.given(value, instant(&text).map_err(|problem| (value.span(), problem)))
+        self.given(value, time(field, value))
     }
 
-    fn duration(&self, value: &Value<'_>) -> Found<Given<f64>> {
-        let text = string("airborne", value)?;
-        self.given(value, duration_s(text).map_err(|problem| (value.span(), problem)))
+    /// A point of the route, in its order.
+    fn on_route(&self, field: &'static str, value: &Value<'_>) -> Found<Named> {
+        let found = named(field, value, |text| self.names.next(text))?;
+        self.names.passed(found.place);
+        Ok(found)
+    }
+
+    /// The points between, from a string or from tables.
+    fn between(&self, table: &DeTable<'_>) -> Found<Vec<Given<RoutePoint>>> {
+        match (table.get("route"), table.get("waypoint")) {
+            (Some(value), Some(_)) => {
+                Err((value.span(), Problem::Exclusive { one: "route", other: "waypoint" }))
+            }
+            (Some(value), None) => self.route(value),
+            (None, Some(value)) => self.waypoints(value),
+            (None, None) => Ok(Vec::new()),
+        }
+    }
+
+    fn route(&self, value: &Value<'_>) -> Found<Vec<Given<RoutePoint>>> {
+        let text = string("route", value)?;
+        let at = self.inside(value, text);
+        let points = route(text, &self.names).map_err(|(span, problem)| match at {
+            Some(at) => (at + span.start..at + span.end, problem),
+            None => (value.span(), problem),
+        })?;
+        let mut lines = LineCounter { text: self.text, byte: 0, line: 1 };
+        let given = points.into_iter().map(|(value, span)| {
+            let byte = at.map_or(0, |at| at + span.start);
+            Given { value, origin: Origin::At(lines.line_of(byte), 1) }
+        });
+        Ok(given.collect())
+    }
+
+    /// Where a string's own text begins in the file, if it stands there letter for letter.
+    fn inside(&self, value: &Value<'_>, text: &str) -> Option<usize> {
+        let span = value.span();
+        self.text.get(span.clone())?.find(text).map(|at| span.start + at)
+    }
+
+    fn duration(&self, table: &DeTable<'_>, field: &'static str) -> Found<Option<Given<f64>>> {
+        let Some(value) = table.get(field) else { return Ok(None) };
+        let seconds = duration_s(string(field, value)?).map_err(|problem| (value.span(), problem));
+        self.given(value, seconds).map(Some)
     }
 
     fn alternates(&self, value: &Value<'_>) -> Found<Vec<Given<Alternate>>> {
@@ -143,7 +236,7 @@ impl Reader<'_> {
             value,
             origin: line_and_column(self.text, span.start),
         };
-        Ok(alternates(value)?.into_iter().map(given).collect())
+        Ok(alternates(value, &self.names)?.into_iter().map(given).collect())
     }
 
     fn waypoints(&self, value: &Value<'_>) -> Found<Vec<Given<RoutePoint>>> {
@@ -162,19 +255,11 @@ impl Reader<'_> {
         let table = table("waypoint", value)?;
         only(table, &WAYPOINT_FIELDS)?;
         let at = table.get("at").ok_or((value.span(), Problem::MissingField("at")))?;
-        let named = named("at", at)?;
-        let time = table.get("time").map(|v| self.waypoint_time(v)).transpose()?;
-        let value = RoutePoint { label: named.label, place: named.place, time };
+        let named = self.on_route("at", at)?;
+        let time = table.get("time").map(|v| time("time", v)).transpose()?;
+        let wind_m_s = table.get("wind_kt").map(wind).transpose()?;
+        let value = RoutePoint { label: named.label, place: named.place, time, wind_m_s };
         Ok(Given { value, origin: Origin::At(lines.line_of(at.span().start), 1) })
-    }
-
-    fn waypoint_time(&self, value: &Value<'_>) -> Found<Instant> {
-        // the line is found only for the few that fail: counting lines for each of many would be quadratic
-        let reader = Reader { text: "" };
-        reader.time("time", value).map(|given| given.value).map_err(|(span, problem)| {
-            debug_assert!(span.start <= self.text.len());
-            (span, problem)
-        })
     }
 }
 
@@ -230,10 +315,23 @@ pub(super) fn number(field: &'static str, value: &Value<'_>) -> Found<f64> {
     text.parse().map_err(|_| wrong(field, value.get_ref(), "a number", value.span()))
 }
 
-/// A place as a string or as `{ lat, lon }`.
-pub(super) fn named(field: &'static str, value: &Value<'_>) -> Found<Named> {
+fn time(field: &'static str, value: &Value<'_>) -> Found<Instant> {
+    let text = match value.get_ref() {
+        DeValue::Datetime(datetime) => datetime.to_string(),
+        DeValue::String(text) => text.to_string(),
+        other => return Err(wrong(field, other, "a date and time with an offset", value.span())),
+    };
+    instant(&text).map_err(|problem| (value.span(), problem))
+}
+
+/// A place as a string, which is looked up, or as `{ lat, lon }`.
+pub(super) fn named(
+    field: &'static str,
+    value: &Value<'_>,
+    look_up: impl Fn(&str) -> Result<Named, Problem>,
+) -> Found<Named> {
     match value.get_ref() {
-        DeValue::String(text) => place(text).map_err(|problem| (value.span(), problem)),
+        DeValue::String(text) => look_up(text).map_err(|problem| (value.span(), problem)),
         DeValue::Table(table) => {
             only(table, &PLACE_FIELDS)?;
             let part = |key| table.get(key).ok_or((value.span(), Problem::MissingField(key)));

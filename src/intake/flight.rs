@@ -1,7 +1,9 @@
 //! A flight as its planner holds it: two ends, two times, perhaps points between.
 
 use super::ahead::{Alternate, LowSunLimits, StationAir};
+use super::block::OnBlock;
 use super::brightness::Brightness;
+use super::pace::{Pace, ProfilePoint};
 use super::place::Named;
 use super::track::Repairs;
 use crate::places::Aerodrome;
@@ -19,8 +21,16 @@ pub struct Flight {
     pub to: Stop,
     /// Take-off.
     pub takeoff: Instant,
-    /// Landing.
-    pub landing: Instant,
+    /// Landing, where its planner says when; otherwise it follows from the pace.
+    pub landing: Option<Instant>,
+    /// What tells how fast it is flown.
+    pub pace: Pace,
+    /// When it goes off blocks, where known.
+    pub off_block: Option<Instant>,
+    /// When it comes on blocks, where known.
+    pub on_block: Option<OnBlock>,
+    /// Heights and speeds along the way, in order; where there are any, the level is the highest of them.
+    pub profile: Vec<ProfilePoint>,
     /// Cruise height above mean sea level.
     pub level: Option<Metres>,
     /// How fast it climbs to that height and descends from it; without it the height holds from take-off to landing.
@@ -45,6 +55,8 @@ pub struct Flight {
     pub to_air: Option<StationAir>,
     /// Where it may divert to, in the order given.
     pub alternates: Vec<Alternate>,
+    /// What its planner should know of how it was read.
+    pub warnings: Vec<String>,
 }
 
 /// One end of a flight.
@@ -71,7 +83,7 @@ impl Stop {
 
 impl From<Named> for Stop {
     fn from(named: Named) -> Self {
-        let Named { label, place, aerodrome } = named;
+        let Named { label, place, aerodrome, .. } = named;
         let name = aerodrome.map(|a| a.name().to_string());
         Self { label, name, place, zone: aerodrome.map(Aerodrome::zone), aerodrome }
     }
@@ -106,6 +118,8 @@ pub struct RoutePoint {
     pub place: Place,
     /// When it is passed, if the planner says so.
     pub time: Option<Instant>,
+    /// The tailwind on the leg that ends here, in metres a second, where the flight is flown at an airspeed.
+    pub wind_m_s: Option<f64>,
 }
 
 /// Where the polar areas begin.

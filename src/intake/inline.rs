@@ -1,10 +1,15 @@
 //! A flight given on the command line instead of in a file.
 
+use super::block::GivenBlock;
 use super::brightness::Brightness;
 use super::draft::{Draft, Given, Origin};
-use super::flight::Flight;
-use super::place::place;
+use super::fixes::Fixes;
+use super::flight::{Flight, RoutePoint};
+use super::gazetteer::Gazetteer;
+use super::pace::GivenPace;
+use super::place::{Named, place};
 use super::problem::{IntakeError, Problem};
+use super::route::route;
 use super::time::{date, duration_s, instant};
 
 /// The texts of a flight's command-line options.
@@ -30,6 +35,12 @@ pub struct Inline<'a> {
     pub descent_ft_min: Option<f64>,
     /// `--horizon-ft`
     pub horizon_ft: Option<f64>,
+    /// `--ground-speed-kt`
+    pub ground_speed_kt: Option<f64>,
+    /// `--route`
+    pub route: Option<&'a str>,
+    /// The user's own fixes.
+    pub fixes: Option<&'a Fixes>,
 }
 
 /// Reads a flight from its options.
@@ -37,28 +48,26 @@ pub struct Inline<'a> {
 /// # Errors
 /// Anything that keeps the flight from being flown, with the option it was given in.
 pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
-    if given.airborne.is_none() && given.landing.is_none() {
+    if given.airborne.is_none() && given.landing.is_none() && given.ground_speed_kt.is_none() {
         let problem = Problem::Landing("neither says when the flight ends");
         let origin = Origin::Option("--airborne, --landing");
         return Err(IntakeError { source_name: String::new(), origin, problem });
     }
+    let names = Gazetteer::new(given.fixes);
+    let (from, waypoints, to) = points(given, &names)?;
     let draft = Draft {
         source_name: String::new(),
         name: given.name.map(str::to_string),
-        from: read("--from", given.from, place)?.value,
-        to: read("--to", given.to, place)?.value,
+        from,
+        to,
         takeoff: read("--takeoff", given.takeoff, instant)?,
         airborne_s: given.airborne.map(|text| read("--airborne", text, duration_s)).transpose()?,
         landing: given.landing.map(|text| read("--landing", text, instant)).transpose()?,
-        level_ft: given.level_ft.map(|value| Given { value, origin: Origin::Option("--level-ft") }),
-        horizon_ft: given.horizon_ft.map(|value| Given { value, origin: Origin::Option("--horizon-ft") }),
-        climb_ft_min: given
-            .climb_ft_min
-            .map(|value| Given { value, origin: Origin::Option("--climb-ft-min") }),
-        descent_ft_min: given
-            .descent_ft_min
-            .map(|value| Given { value, origin: Origin::Option("--descent-ft-min") }),
-        waypoints: Vec::new(),
+        level_ft: number(given.level_ft, "--level-ft"),
+        horizon_ft: number(given.horizon_ft, "--horizon-ft"),
+        climb_ft_min: number(given.climb_ft_min, "--climb-ft-min"),
+        descent_ft_min: number(given.descent_ft_min, "--descent-ft-min"),
+        waypoints,
         polar_limits: None,
         dut1: None,
         brightness: Brightness::default(),
@@ -66,8 +75,35 @@ pub fn inline_flight(given: &Inline<'_>) -> Result<Flight, IntakeError> {
         from_air: None,
         to_air: None,
         alternates: Vec::new(),
+        warnings: names.warnings(),
+        cruise_ft: None,
+        pace: GivenPace {
+            ground_speed_kt: number(given.ground_speed_kt, "--ground-speed-kt"),
+            ..GivenPace::default()
+        },
+        block: GivenBlock::default(),
     };
     draft.checked()
+}
+
+fn number(value: Option<f64>, option: &'static str) -> Option<Given<f64>> {
+    value.map(|value| Given { value, origin: Origin::Option(option) })
+}
+
+/// The ends and what lies between, looked up in the order of the route.
+fn points(
+    given: &Inline<'_>,
+    names: &Gazetteer<'_>,
+) -> Result<(Named, Vec<Given<RoutePoint>>, Named), IntakeError> {
+    let from = read("--from", given.from, |text| names.next(text))?.value;
+    let between = |text: &str| route(text, names).map_err(|(_, problem)| problem);
+    let points = given.route.map(|text| read("--route", text, between)).transpose()?;
+    let waypoints = points.map_or(Vec::new(), |points| {
+        let one = |(value, _)| Given { value, origin: Origin::Option("--route") };
+        points.value.into_iter().map(one).collect()
+    });
+    let to = read("--to", given.to, |text| names.next(text))?.value;
+    Ok((from, waypoints, to))
 }
 
 /// A place given on its own: an aerodrome's code or coordinates, with its label and zone.

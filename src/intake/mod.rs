@@ -8,18 +8,26 @@ mod flight;
 mod ahead;
 mod problem;
 mod place;
+mod fixes;
+mod gazetteer;
+mod route;
 mod time;
+mod pace;
+mod block;
 mod draft;
 mod file;
 mod inline;
 mod track;
 
 pub use ahead::{Alternate, LowSunLimits, StationAir};
+pub use block::OnBlock;
 pub use brightness::{Brightness, BrightnessError, lux_levels};
 pub use draft::Origin;
-pub use file::flight_file;
+pub use file::{flight_file, flight_file_with_fixes};
+pub use fixes::Fixes;
 pub use flight::{ClimbRates, Flight, PolarLimits, Recorded, RoutePoint, Stop};
 pub use inline::{Inline, date_argument, inline_flight, instant_argument, place_argument};
+pub use pace::{Mark, Pace, ProfilePoint};
 pub use problem::{IntakeError, Problem};
 pub use track::{
     Bridge, Columns, InputKind, Repair, Repairs, Track, TrackOptions, TrackPoint, TrackProblem, Tracks,

@@ -4,12 +4,16 @@ use super::ahead::{AIR_FIELDS, ALTERNATE_FIELDS, LOW_SUN_FIELDS};
 use super::brightness::BrightnessError;
 use super::draft::Origin;
 use super::file::{FIELDS, PLACE_FIELDS, POLAR_FIELDS, WAYPOINT_FIELDS};
+use super::pace::PROFILE_FIELDS;
 use super::track::TrackProblem;
 use crate::places::UnknownAerodrome;
 use crate::units::{Dut1Error, PlaceError, YEARS};
 
 /// What was given is quoted up to this length.
 const LONGEST_QUOTED: usize = 40;
+
+/// A value, or what is wrong with it and where that stands.
+pub(super) type Stands<T> = Result<T, (Origin, Problem)>;
 
 /// Something is wrong with a flight as it was given.
 #[derive(Debug, Clone, PartialEq, thiserror::Error)]
@@ -67,6 +71,109 @@ pub enum Problem {
     /// A level or share of light that cannot be.
     #[error(transparent)]
     Brightness(#[from] BrightnessError),
+    /// A name that stands for several fixes, with nothing before it to be near to.
+    #[error("{} names {count} fixes, and no point before it tells which", quoted(name))]
+    SeveralFixes {
+        /// As given.
+        name: String,
+        /// How many there are.
+        count: usize,
+    },
+    /// A line that is too long, or not UTF-8.
+    #[error("the line is not UTF-8 text of ordinary length")]
+    NotALine,
+    /// A row of fixes that lacks something.
+    #[error("{} is no fix: name, latitude and longitude are wanted", quoted(.0))]
+    NoFix(String),
+    /// A fix's name that is too long or not printable.
+    #[error("{} is no name of a fix", quoted(.0))]
+    FixName(String),
+    /// A fix's latitude or longitude that is no number.
+    #[error("{} is no number of degrees", quoted(.0))]
+    FixNumber(String),
+    /// Latitude and longitude exchanged.
+    #[error("latitude {lat}° is outside −90° to 90°; with longitude {lon}° they look exchanged")]
+    Swapped {
+        /// As given.
+        lat: f64,
+        /// As given.
+        lon: f64,
+    },
+    /// More fixes than are held.
+    #[error("more than {most} fixes")]
+    TooManyFixes {
+        /// How many there may be.
+        most: usize,
+    },
+    /// A route without points.
+    #[error("the route names no point")]
+    EmptyRoute,
+    /// Two fields of which only one may be given.
+    #[error("'{one}' and '{other}' are both given")]
+    Exclusive {
+        /// One.
+        one: &'static str,
+        /// The other.
+        other: &'static str,
+    },
+    /// More points than a profile holds.
+    #[error("{count} profile points are more than the {most} that a flight file may have")]
+    LongProfile {
+        /// How many there are.
+        count: usize,
+        /// How many there may be.
+        most: usize,
+    },
+    /// A profile that goes back.
+    #[error("profile point {number} does not lie after the one before it")]
+    ProfileOrder {
+        /// Counted from 1.
+        number: usize,
+    },
+    /// A profile that gives speeds, but none for its beginning.
+    #[error("the profile gives a speed from here on, but none from take-off")]
+    NoFirstSpeed,
+    /// A wind without an airspeed.
+    #[error("a wind stands without 'true_airspeed_kt'")]
+    WindAlone,
+    /// A headwind that no speed is left of.
+    #[error("airspeed and wind leave a ground speed of {speed_kt:.0} kt, below 10 kt")]
+    NoHeadway {
+        /// Knots.
+        speed_kt: f64,
+    },
+    /// A waypoint's time beside speeds.
+    #[error("waypoint {number} ({label}) has a time, though speeds tell when it is passed")]
+    TimeAndSpeed {
+        /// Counted from 1.
+        number: usize,
+        /// As given.
+        label: String,
+    },
+    /// Off blocks after take-off.
+    #[error("off blocks at {off} is after the take-off at {takeoff}")]
+    OffBlockLate {
+        /// RFC 3339.
+        off: String,
+        /// RFC 3339.
+        takeoff: String,
+    },
+    /// On blocks before landing.
+    #[error("on blocks at {on} is before the landing at {landing}")]
+    OnBlockEarly {
+        /// RFC 3339.
+        on: String,
+        /// RFC 3339.
+        landing: String,
+    },
+    /// A taxi longer than any.
+    #[error("{hours:.1} h between blocks and runway is outside 0 h to {longest} h")]
+    LongTaxi {
+        /// Hours.
+        hours: f64,
+        /// The longest that is taken.
+        longest: f64,
+    },
     /// A code that is not known.
     #[error(transparent)]
     UnknownAerodrome(UnknownAerodrome),
@@ -221,7 +328,9 @@ impl Problem {
         let text = match self {
             Self::UnknownAerodrome(unknown) => return unknown_place_hint(unknown),
             Self::Track(problem) => return problem.hint(),
-            Self::Coordinates(_) => "write 7830N02000W, 78N020W or 78.5,-20",
+            Self::Coordinates(_) => {
+                "write 7830N02000W, 78N020W, 78-30N 020-00W or 78.5,-20: two digits for degrees of latitude, three for longitude"
+            }
             Self::Instant(_) | Self::NoOffset(_) => {
                 "write 2026-12-18T05:10Z, or 2026-12-18T00:10-05:00 with an offset"
             }
@@ -232,7 +341,16 @@ impl Problem {
             Self::UnknownField(field) => return near_field(field),
             Self::Landing(_) => "give one of airborne = \"14h55m\" and landing = 2026-12-18T20:05:00Z",
             Self::HalfAClimb => "give level_ft, climb_ft_min and descent_ft_min together",
-            Self::LandingConflict { .. } => "leave one of them out",
+            Self::NoFirstSpeed => {
+                "give ground_speed_kt for the whole flight too, or a point with at = \"0m\""
+            }
+            Self::WindAlone => "give true_airspeed_kt; a ground speed has its wind in it",
+            Self::TimeAndSpeed { .. } => "leave the time out, or the speeds",
+            Self::SeveralFixes { .. } => "give its coordinates instead",
+            Self::FixNumber(_) => "write decimal degrees, such as 78.5 and -20",
+            Self::Swapped { .. } => "a row without a header is name, latitude, longitude",
+            Self::EmptyRoute => "write points parted by blanks: \"7030N06000W 78N040W CYFB\"",
+            Self::Exclusive { .. } | Self::LandingConflict { .. } => "leave one of them out",
             _ => return None,
         };
         Some(text.to_string())
@@ -257,6 +375,7 @@ fn near_field(field: &str) -> Option<String> {
         &LOW_SUN_FIELDS,
         &AIR_FIELDS,
         &ALTERNATE_FIELDS,
+        &PROFILE_FIELDS,
     ]
     .concat();
     let lower = field.to_ascii_lowercase();

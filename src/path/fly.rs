@@ -1,46 +1,20 @@
 //! From a flight to its path: each leg gets its geodesic, and each point its time.
 
+use super::error::{FlightError, LONGEST_H};
 use super::geodesic::Line;
-use super::height::{Climb, Heights};
+use super::height::Heights;
 use super::leg::Leg;
-use crate::intake::Flight;
+use super::pace::paced;
+use super::profile::heights;
+use crate::intake::{Flight, Pace};
 use crate::units::{Angle, Instant, Metres, Place, Vector};
 
 /// The highest ground speed that is taken for a flight.
-const FASTEST_KT: f64 = 1500.0;
+pub(super) const FASTEST_KT: f64 = 1500.0;
 /// One knot in metres a second (ICAO Annex 5, table 3-3).
 const KNOT_M_S: f64 = 1852.0 / 3600.0;
-
-/// Why a flight cannot be flown as it stands.
-#[derive(Debug, Clone, PartialEq, thiserror::Error)]
-pub enum FlightError {
-    /// It goes nowhere.
-    #[error(
-        "the flight from {from} to {to} has no length: both are the same place and no waypoint lies between"
-    )]
-    NoLength {
-        /// Where it begins.
-        from: String,
-        /// Where it ends.
-        to: String,
-    },
-    /// It would need an impossible speed.
-    #[error(
-        "from {from} to {to} is {distance_nm:.0} NM in {minutes:.1} min, a ground speed of {speed_kt:.0} kt: outside 0 kt to {FASTEST_KT:.0} kt"
-    )]
-    TooFast {
-        /// Where the stretch begins.
-        from: String,
-        /// Where it ends.
-        to: String,
-        /// Its length in nautical miles.
-        distance_nm: f64,
-        /// Its duration in minutes.
-        minutes: f64,
-        /// The speed in knots.
-        speed_kt: f64,
-    },
-}
+/// How far the time by speeds may be from the given one: speeds are given to a few knots.
+const SPEED_AGREES: f64 = 0.01;
 
 /// A flown flight: its legs in order, without a gap.
 #[derive(Debug, Clone)]
@@ -69,20 +43,50 @@ pub struct Position {
 }
 
 /// A point of the route with the time it must be passed at, if it has one.
-struct Fix<'a> {
+pub(super) struct Fix<'a> {
     label: &'a str,
-    place: Place,
+    pub(super) place: Place,
     at_s: Option<f64>,
 }
 
-/// Flies a flight: constant ground speed between points that have times.
+/// What flying gives: legs without a gap, when each point is passed, and the time in the air.
+pub(super) struct Flown {
+    pub(super) legs: Vec<Leg>,
+    pub(super) passed_s: Vec<f64>,
+    pub(super) airborne_s: f64,
+}
+
+/// Flies a flight: at its speeds, or at a constant ground speed between points that have times.
 ///
 /// # Errors
-/// A flight of no length, or a stretch that needs an impossible speed. These need the geodesics, so they are found here
-/// and not at intake.
+/// A flight of no length, a stretch that needs an impossible speed, speeds and a profile that do not fit the path. These
+/// need the geodesics, so they are found here and not at intake.
 pub fn fly(flight: &Flight) -> Result<Path, FlightError> {
-    let airborne_s = flight.landing.since_s(flight.takeoff);
-    let fixes = fixes(flight, airborne_s);
+    let flown = if flight.pace == Pace::Times {
+        timed(flight)?
+    } else {
+        paced(flight, &fixes(flight, None), |by_speed_s| fitted(flight, by_speed_s))?
+    };
+    let Flown { legs, mut passed_s, airborne_s } = flown;
+    // the last fix is the landing, and a recording's points are no waypoints
+    passed_s.pop();
+    if flight.recorded.is_some() {
+        passed_s.clear();
+    }
+    Ok(Path {
+        takeoff: flight.takeoff,
+        airborne_s,
+        heights: heights(flight, &legs, airborne_s)?,
+        legs,
+        waypoints_s: passed_s,
+    })
+}
+
+/// Every stretch between two points with times at its own speed.
+fn timed(flight: &Flight) -> Result<Flown, FlightError> {
+    let landing = flight.landing.ok_or(FlightError::Endless)?;
+    let airborne_s = landing.since_s(flight.takeoff);
+    let fixes = fixes(flight, Some(airborne_s));
     let mut legs = Vec::with_capacity(fixes.len() - 1);
     let mut passed_s = Vec::with_capacity(fixes.len() - 1);
     let mut begin = 0;
@@ -92,43 +96,51 @@ pub fn fly(flight: &Flight) -> Result<Path, FlightError> {
             begin = end;
         }
     }
-    // the last fix is the landing, and a recording's points are no waypoints
-    passed_s.pop();
-    if flight.recorded.is_some() {
-        passed_s.clear();
-    }
     if legs.iter().all(|leg| leg.length_m() == 0.0) {
-        return Err(FlightError::NoLength { from: flight.from.label.clone(), to: flight.to.label.clone() });
+        return Err(no_length(flight));
     }
-    Ok(Path {
-        takeoff: flight.takeoff,
-        airborne_s,
-        heights: heights(flight, airborne_s),
-        legs,
-        waypoints_s: passed_s,
-    })
+    Ok(Flown { legs, passed_s, airborne_s })
 }
 
-/// The level from take-off to landing, or up to it and down from it where rates of climb and descent are given.
-fn heights(flight: &Flight, airborne_s: f64) -> Option<Heights> {
-    if let Some(recorded) = &flight.recorded {
-        return recorded.heights.as_deref().map(Heights::through);
-    }
-    let level = flight.level?;
-    let Some(rates) = flight.climb else { return Some(Heights::level(level, airborne_s)) };
-    let field = |stop: &crate::intake::Stop| stop.height().map_or(0.0, |height| height.0.min(level.0));
-    let climb = Climb {
-        from_m: field(&flight.from),
-        level_m: level.0,
-        to_m: field(&flight.to),
-        rates_m_s: (rates.climb.0 / 60.0, rates.descent.0 / 60.0),
-    };
-    Some(Heights::climbing(climb, airborne_s))
+fn no_length(flight: &Flight) -> FlightError {
+    FlightError::NoLength { from: flight.from.label.clone(), to: flight.to.label.clone() }
 }
 
-fn fixes(flight: &Flight, airborne_s: f64) -> Vec<Fix<'_>> {
+/// The time in the air from that by speeds: the given one where both agree.
+fn fitted(flight: &Flight, by_speed_s: f64) -> Result<f64, FlightError> {
+    if by_speed_s <= 0.0 {
+        return Err(no_length(flight));
+    }
+    if let Some(landing) = flight.landing {
+        let given_s = landing.since_s(flight.takeoff);
+        let agrees = (by_speed_s / given_s - 1.0).abs() <= SPEED_AGREES;
+        let (by_speed_min, by_landing_min) = (by_speed_s / 60.0, given_s / 60.0);
+        return agrees.then_some(given_s).ok_or(FlightError::SpeedConflict { by_speed_min, by_landing_min });
+    }
+    if by_speed_s > LONGEST_H * 3600.0 {
+        return Err(FlightError::TooLong { hours: by_speed_s / 3600.0 });
+    }
+    check_after(flight, flight.takeoff.after_s(by_speed_s))?;
+    Ok(by_speed_s)
+}
+
+/// What comes after a landing that was not known at intake.
+fn check_after(flight: &Flight, landing: Instant) -> Result<(), FlightError> {
+    if let Some(on) = flight.on_block.map(|on| on.after(landing)) {
+        let minutes = on.since_s(landing) / 60.0;
+        if !(0.0..=720.0).contains(&minutes) {
+            return Err(FlightError::OnBlock { minutes });
+        }
+    }
+    let on = flight.on_block.map(|on| on.after(landing));
+    let used = flight.alternates.iter().map(|alternate| landing.after_s(alternate.after_s));
+    let answered = used.chain(on).chain(std::iter::once(landing)).all(Instant::is_answered_for);
+    if answered { Ok(()) } else { Err(FlightError::Years) }
+}
+
+fn fixes(flight: &Flight, airborne_s: Option<f64>) -> Vec<Fix<'_>> {
     let begin = Fix { label: &flight.from.label, place: flight.from.place, at_s: Some(0.0) };
-    let end = Fix { label: &flight.to.label, place: flight.to.place, at_s: Some(airborne_s) };
+    let end = Fix { label: &flight.to.label, place: flight.to.place, at_s: airborne_s };
     let between = flight.waypoints.iter().map(|w| Fix {
         label: &w.label,
         place: w.place,

@@ -28,9 +28,9 @@ impl Heights {
         Self { points: vec![(0.0, height.0), (airborne_s, height.0)] }
     }
 
-    /// Straight lines through recorded heights, which begin at take-off and end at landing.
-    pub(super) fn through(points: &[(f64, Metres)]) -> Self {
-        Self { points: points.iter().map(|&(at_s, height)| (at_s, height.0)).collect() }
+    /// Straight between points of seconds and metres, the first at take-off, the last at landing, times rising.
+    pub(super) fn through(points: Vec<(f64, f64)>) -> Self {
+        Self { points }
     }
 
     /// Up at one rate, along, and down at the other; a flight too short for its level turns where both lines meet.

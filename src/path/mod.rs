@@ -5,13 +5,17 @@
 mod geodesic;
 mod leg;
 mod height;
+mod error;
+mod pace;
+mod profile;
 mod fly;
 mod circle;
 mod extent;
 
 pub use circle::{Circle, CircleCrossing, CircleName, Heading, circles};
+pub use error::FlightError;
 pub use extent::Passed;
-pub use fly::{FlightError, Path, Position, fly};
+pub use fly::{Path, Position, fly};
 pub use geodesic::{Frame, Line, LinePoint};
 pub use height::Heights;
 pub use leg::Leg;

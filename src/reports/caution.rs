@@ -21,7 +21,8 @@ pub(super) fn cautions(brief: &Brief) -> Vec<String> {
             "Positions are those recorded, joined by shortest paths at a constant ground speed.".to_string(),
         );
     } else if brief.flight.waypoints.is_empty() {
-        cautions.push("Positions are those of the shortest path at a constant ground speed.".to_string());
+        let pace = if brief.path.legs().len() == 1 { "a constant ground speed" } else { "the speeds given" };
+        cautions.push(format!("Positions are those of the shortest path at {pace}."));
     }
     cautions
 }

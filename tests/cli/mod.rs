@@ -7,6 +7,7 @@ mod forms;
 mod hostile;
 mod raw;
 mod refusal;
+mod route;
 mod sun;
 mod writing;
 

@@ -44,7 +44,7 @@ proptest! {
     fn scraps_of_a_flight_file_are_one_or_an_error(scraps in prop::collection::vec(scrap(), 0..40)) {
         for text in [scraps.concat(), format!("{FLIGHT}{}", scraps.concat())] {
             match flight_file(&text, "any") {
-                Ok(flight) => prop_assert!(flight.landing > flight.takeoff),
+                Ok(flight) => prop_assert!(flight.landing.is_some_and(|landing| landing > flight.takeoff)),
                 Err(error) => prop_assert!(!error.to_string().contains(char::is_control), "{error}"),
             }
         }
@@ -71,6 +71,8 @@ proptest! {
             horizon_ft: Some(level),
             climb_ft_min: Some(level),
             descent_ft_min: Some(level),
+            route: Some(&a),
+            ..Inline::default()
         };
         if let Err(error) = inline_flight(&inline) {
             prop_assert!(!error.to_string().contains(char::is_control), "{error}");
@@ -84,7 +86,7 @@ proptest! {
             ..Inline::default()
         };
         if let Ok(flight) = inline_flight(&inline) {
-            let hours = flight.landing.since_s(flight.takeoff) / 3600.0;
+            let hours = flight.landing.unwrap().since_s(flight.takeoff) / 3600.0;
             prop_assert!(hours > 0.0 && hours <= 36.0 && (0.0..=60_000.0).contains(&level));
         }
     }

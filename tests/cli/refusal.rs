@@ -45,7 +45,8 @@ fn a_place_that_is_not_on_the_earth_is_refused() {
     assert_said(&with("from", r#"from = "91,0""#), "flight.toml:3:8: latitude 91° is outside −90° to 90°");
     assert_said(
         &with("from", r#"from = "7860N02000W""#),
-        "flight.toml:3:8: '7860N02000W' is no coordinate pair\n  hint: write 7830N02000W, 78N020W or 78.5,-20",
+        "flight.toml:3:8: '7860N02000W' is no coordinate pair\n  hint: write 7830N02000W, 78N020W, 78-30N 020-00W or \
+         78.5,-20: two digits for degrees of latitude, three for longitude",
     );
 }
 

@@ -1,4 +1,4 @@
-//! What is taken in: recorded tracks.
+//! What is taken in: flight files and recorded tracks.
 
 mod brief;
 mod formats;
@@ -8,6 +8,11 @@ mod headers;
 mod packed;
 mod raw;
 mod recorded;
+mod notation;
+mod route;
+mod fixes;
+mod profile;
+mod block;
 
 use gloamline::intake::{IntakeError, Track, TrackOptions, Tracks, tracks};
 
@@ -42,4 +47,15 @@ pub(crate) fn mended(track: &Track) -> Vec<String> {
 pub(crate) fn refusal(text: &str, name: &str) -> (String, String) {
     let error = read(text, name).unwrap_err();
     (error.to_string(), error.hint().unwrap_or_default())
+}
+
+/// A flight that wants nothing more.
+const FLIGHT: &str =
+    "from = \"CYYZ\"\nto = \"VHHH\"\ntakeoff = 2026-12-18T05:10:00Z\nairborne = \"14h55m\"\n";
+
+/// What is said of a flight file that is refused, with its cure.
+fn said(text: &str) -> String {
+    let error = gloamline::intake::flight_file(text, "f.toml").unwrap_err();
+    let hint = error.hint().map_or(String::new(), |hint| format!("\n{hint}"));
+    format!("{error}{hint}")
 }

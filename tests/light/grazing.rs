@@ -38,7 +38,7 @@ fn extremes(path: &Path, sky: &Sky) -> Vec<Extreme> {
 fn later(flight: &Flight, seconds: f64) -> Path {
     let mut moved = flight.clone();
     moved.takeoff = flight.takeoff.after_s(seconds);
-    moved.landing = flight.landing.after_s(seconds);
+    moved.landing = flight.landing.map(|landing| landing.after_s(seconds));
     for point in &mut moved.waypoints {
         point.time = point.time.map(|time| time.after_s(seconds));
     }

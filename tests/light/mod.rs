@@ -10,7 +10,7 @@ mod properties;
 mod trust;
 
 use crate::tables::{Row, instant, number, rows};
-use gloamline::intake::{Flight, RoutePoint, Stop};
+use gloamline::intake::{Flight, Pace, RoutePoint, Stop};
 use gloamline::units::Place;
 
 /// A flight through timed points, from take-off to landing.
@@ -21,13 +21,18 @@ pub(crate) fn flight(name: &str, takeoff: gloamline::units::Instant, points: &[(
         label: String::new(),
         place,
         time: Some(takeoff.after_s(s)),
+        wind_m_s: None,
     });
     Flight {
         name: name.to_string(),
         from: stop(first.0),
         to: stop(last.0),
         takeoff,
-        landing: takeoff.after_s(last.1),
+        landing: Some(takeoff.after_s(last.1)),
+        pace: Pace::Times,
+        off_block: None,
+        on_block: None,
+        profile: Vec::new(),
         level: None,
         climb: None,
         horizon: None,
@@ -40,6 +45,7 @@ pub(crate) fn flight(name: &str, takeoff: gloamline::units::Instant, points: &[(
         from_air: None,
         to_air: None,
         alternates: Vec::new(),
+        warnings: Vec::new(),
     }
 }
 

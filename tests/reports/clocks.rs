@@ -80,7 +80,7 @@ fn the_local_times_of_every_row_are_those_of_the_zones() {
         for (row, segment) in segments.iter().skip(1).zip(&brief.light.segments) {
             assert_eq!(row[1..3], zones.map(|zone| clock(at(segment.begin_s), zone)), "{given:?}\n{text}");
         }
-        for (what, instant) in [("Take-off", brief.flight.takeoff), ("Landing", brief.flight.landing)] {
+        for (what, instant) in [("Take-off", brief.flight.takeoff), ("Landing", brief.path.landing())] {
             let line = text.lines().find(|line| line.trim_start().starts_with(what)).unwrap();
             let local =
                 zones.map(|zone| instant.utc().with_timezone(&zone).format("%d %b %H:%M").to_string());

@@ -78,15 +78,16 @@ pub(super) fn draw(canvas: &mut Canvas, brief: &Brief) {
     canvas.text(&format!("{from} → {to}"), Point::new(MARGIN, 76.0), &ends);
 
     let length = Metres(brief.path.distance_m());
+    let word = if flight.profile.is_empty() { "cruise" } else { "up to" };
     let level =
-        flight.level.map_or(String::new(), |level| format!(", cruise {} ft", thousands(level.feet())));
+        flight.level.map_or(String::new(), |level| format!(", {word} {} ft", thousands(level.feet())));
     let facts = format!(
         "{} km ({} NM) in {}{level}   ·   take-off {} UTC, landing {} UTC",
         thousands(length.0 / 1000.0),
         thousands(length.nautical_miles()),
         duration(brief.path.airborne_s),
         second(flight.takeoff),
-        second(flight.landing),
+        second(brief.path.landing()),
     );
     canvas.text(&facts, Point::new(MARGIN, 99.0), &TextStyle { ink: MUTED, ..letters(16.0) });
 }

@@ -2,6 +2,7 @@
 
 use super::super::brightness::Brightness;
 use super::super::flight::{Flight, Recorded, RoutePoint, Stop};
+use super::super::pace::Pace;
 use super::{Track, TrackPoint};
 use crate::places::{Aerodrome, nearest};
 use crate::units::Metres;
@@ -28,13 +29,18 @@ impl Track {
             label: String::new(),
             place: point.place,
             time: Some(point.instant),
+            wind_m_s: None,
         });
         Flight {
             name: self.name.filter(|name| !name.trim().is_empty()).unwrap_or_else(|| source_stem.to_string()),
             from: stop(&first),
             to: stop(&last),
             takeoff: first.instant,
-            landing: last.instant,
+            landing: Some(last.instant),
+            pace: Pace::Times,
+            off_block: None,
+            on_block: None,
+            profile: Vec::new(),
             level: None,
             climb: None,
             horizon: None,
@@ -47,6 +53,7 @@ impl Track {
             to_air: None,
             alternates: Vec::new(),
             brightness: Brightness::default(),
+            warnings: Vec::new(),
         }
     }
 }

@@ -118,7 +118,7 @@ pub(super) fn runways(brief: &Brief) -> [RunwaysRecord; 2] {
     };
     [
         record("takeoff", &flight.from.label, flight.takeoff, &brief.runways[0]),
-        record("landing", &flight.to.label, flight.landing, &brief.runways[1]),
+        record("landing", &flight.to.label, brief.path.landing(), &brief.runways[1]),
     ]
 }
 

@@ -13,6 +13,12 @@ pub(super) struct FlightRecord {
     takeoff_utc: String,
     landing_utc: String,
     airborne_s: f64,
+    #[serde(skip_serializing_if = "Option::is_none")]
+    off_block_utc: Option<String>,
+    #[serde(skip_serializing_if = "Option::is_none")]
+    on_block_utc: Option<String>,
+    #[serde(skip_serializing_if = "Option::is_none")]
+    block_s: Option<f64>,
     distance_m: f64,
     #[serde(skip_serializing_if = "Option::is_none")]
     level_ft: Option<f64>,
@@ -36,8 +42,11 @@ impl FlightRecord {
             from: flight.from.label.clone(),
             to: flight.to.label.clone(),
             takeoff_utc: machine(flight.takeoff),
-            landing_utc: machine(flight.landing),
+            landing_utc: machine(brief.path.landing()),
             airborne_s: rounded(brief.path.airborne_s, 3),
+            off_block_utc: flight.off_block.map(machine),
+            on_block_utc: brief.on_block().map(machine),
+            block_s: flight.off_block.zip(brief.on_block()).map(|(off, on)| rounded(on.since_s(off), 3)),
             distance_m: rounded(brief.path.distance_m(), 1),
             level_ft: flight.level.map(|level| rounded(level.feet(), 1)),
             from_lat_deg,

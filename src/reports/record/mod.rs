@@ -39,6 +39,7 @@ pub(super) struct Record {
     #[serde(skip_serializing_if = "Option::is_none")]
     recording: Option<recording::RecordingRecord>,
     ut1_minus_utc_s: f64,
+    warnings: Vec<String>,
     cautions: Vec<String>,
 }
 
@@ -76,6 +77,7 @@ impl Record {
             southernmost: point(brief, brief.southernmost),
             recording: brief.flight.recorded.as_ref().map(recording::RecordingRecord::of),
             ut1_minus_utc_s: brief.dut1_s,
+            warnings: brief.flight.warnings.clone(),
             cautions: super::caution::cautions(brief),
         }
     }

@@ -3,19 +3,20 @@
 use super::format::{place, sun};
 use crate::Brief;
 use crate::intake::{Flight, Stop};
-use crate::label::clock::{date, day_and_second, duration, local_day_and_minute, offsets};
+use crate::label::clock::{date, day_and_second, duration, local_day_and_minute, offsets, second};
 use crate::label::one_line;
 use crate::label::words::{limit_key, spoken, state_key};
 use crate::reports::table::columns;
-use crate::units::Metres;
+use crate::units::{Instant, Metres};
 use chrono_tz::Tz;
 
 pub(super) fn headline(brief: &Brief) -> String {
     let flight = &brief.flight;
     let length = Metres(brief.path.distance_m());
-    let level = flight.level.map_or(String::new(), |level| format!(", cruise {:.0} ft", level.feet()));
+    let word = if flight.profile.is_empty() { "cruise" } else { "up to" };
+    let level = flight.level.map_or(String::new(), |level| format!(", {word} {:.0} ft", level.feet()));
     format!(
-        "{}   {} → {}   {}\n{}{:.0} km ({:.0} NM) in {}{level}\n",
+        "{}   {} → {}   {}\n{}{:.0} km ({:.0} NM) in {}{level}\n{}",
         one_line(&flight.name),
         stop_name(&flight.from),
         stop_name(&flight.to),
@@ -24,7 +25,21 @@ pub(super) fn headline(brief: &Brief) -> String {
         length.0 / 1000.0,
         length.nautical_miles(),
         duration(brief.path.airborne_s),
+        blocks(brief),
     )
+}
+
+/// Off blocks and on blocks, apart from the time in the air, where they are known.
+fn blocks(brief: &Brief) -> String {
+    let taxi = |from: Instant, to: Instant| duration(to.since_s(from));
+    let (off, on) = (brief.flight.off_block, brief.on_block());
+    let said = [
+        off.map(|off| format!("off {} UTC (taxi {})", second(off), taxi(off, brief.flight.takeoff))),
+        on.map(|on| format!("on {} UTC (taxi {})", second(on), taxi(brief.path.landing(), on))),
+        off.zip(on).map(|(off, on)| format!("{} in all", taxi(off, on))),
+    ];
+    let said: Vec<String> = said.into_iter().flatten().collect();
+    if said.is_empty() { String::new() } else { format!("blocks {}\n", said.join(", ")) }
 }
 
 /// A stop's code, or its position where it was given by coordinates.
@@ -75,7 +90,8 @@ impl Clocks {
 pub(super) fn ends(brief: &Brief) -> String {
     let flight = &brief.flight;
     let clocks = Clocks::of(flight);
-    let head = |label: &str, zone| format!("{label} ({})", offsets(flight.takeoff, flight.landing, zone));
+    let head =
+        |label: &str, zone| format!("{label} ({})", offsets(flight.takeoff, brief.path.landing(), zone));
     let mut rows = vec![clocks.row(
         "          UTC".into(),
         head,
@@ -83,7 +99,7 @@ pub(super) fn ends(brief: &Brief) -> String {
     )];
     for (what, at, sample, state) in [
         ("Take-off", flight.takeoff, brief.at_takeoff(), brief.light.at_takeoff),
-        ("Landing ", flight.landing, brief.at_landing(), brief.light.at_landing),
+        ("Landing ", brief.path.landing(), brief.at_landing(), brief.light.at_landing),
     ] {
         let first = format!("{what}  {}", day_and_second(at));
         let tail = [sun(sample), spoken(state_key(state))];

@@ -13,6 +13,7 @@ mod recording;
 
 use super::table::wrapped;
 use crate::Brief;
+use crate::label::one_line;
 use crate::units::Instant;
 
 /// How wide a paragraph is set.
@@ -35,6 +36,7 @@ pub fn text(brief: &Brief) -> String {
         route::extremes(brief),
         route::circles(brief),
         recording::recording(brief),
+        warnings(brief),
         cautions(brief),
     ];
     parts.into_iter().filter(|part| !part.is_empty()).collect::<Vec<_>>().join("\n")
@@ -42,6 +44,13 @@ pub fn text(brief: &Brief) -> String {
 
 fn at(brief: &Brief, at_s: f64) -> Instant {
     brief.path.takeoff.after_s(at_s)
+}
+
+/// What was to be said of how the flight was read.
+fn warnings(brief: &Brief) -> String {
+    let told = &brief.flight.warnings;
+    let lines: String = told.iter().map(|warning| wrapped("  - ", &one_line(warning), WIDTH)).collect();
+    if lines.is_empty() { lines } else { format!("Warnings\n{lines}") }
 }
 
 fn cautions(brief: &Brief) -> String {
