@@ -42,7 +42,7 @@ impl<'f> Gazetteer<'f> {
     pub(super) fn find(&self, text: &str) -> Result<Named, Problem> {
         let named = self.fixes.map_or(&[][..], |fixes| fixes.named(text));
         let found = match (place(text), named) {
-            (Err(problem), []) => return Err(problem),
+            (Err(problem), []) => return Err(self.unknown(problem)),
             (Err(_), several) => self.nearest(text.trim(), several)?,
             (Ok(found), []) => found,
             (Ok(found), _) => {
@@ -58,6 +58,16 @@ impl<'f> Gazetteer<'f> {
             self.warn(warning.clone());
         }
         Ok(found)
+    }
+
+    /// Where fixes were looked through as well, that is said.
+    fn unknown(&self, problem: Problem) -> Problem {
+        match problem {
+            Problem::UnknownAerodrome(unknown) if self.fixes.is_some_and(|fixes| fixes.count() > 0) => {
+                Problem::UnknownName(unknown)
+            }
+            other => other,
+        }
     }
 
     fn nearest(&self, name: &str, several: &[Place]) -> Result<Named, Problem> {

@@ -177,6 +177,9 @@ pub enum Problem {
     /// A code that is not known.
     #[error(transparent)]
     UnknownAerodrome(UnknownAerodrome),
+    /// A name that is neither a code nor a fix.
+    #[error("{0}, and no fix that name")]
+    UnknownName(UnknownAerodrome),
     /// Coordinates that cannot be read.
     #[error("{} is no coordinate pair", quoted(.0))]
     Coordinates(String),
@@ -326,8 +329,14 @@ pub(super) fn escaped(given: &str, longest: usize) -> String {
 impl Problem {
     fn hint(&self) -> Option<String> {
         let text = match self {
+<<<<<<< HEAD
             Self::UnknownAerodrome(unknown) => return unknown_place_hint(unknown),
             Self::Track(problem) => return problem.hint(),
+=======
+            Self::UnknownAerodrome(unknown) | Self::UnknownName(unknown) => {
+                return unknown_place_hint(unknown);
+            }
+>>>>>>> route
             Self::Coordinates(_) => {
                 "write 7830N02000W, 78N020W, 78-30N 020-00W or 78.5,-20: two digits for degrees of latitude, three for longitude"
             }
@@ -347,6 +356,7 @@ impl Problem {
             Self::WindAlone => "give true_airspeed_kt; a ground speed has its wind in it",
             Self::TimeAndSpeed { .. } => "leave the time out, or the speeds",
             Self::SeveralFixes { .. } => "give its coordinates instead",
+            Self::NotALine => "save the file as UTF-8, not as UTF-16",
             Self::FixNumber(_) => "write decimal degrees, such as 78.5 and -20",
             Self::Swapped { .. } => "a row without a header is name, latitude, longitude",
             Self::EmptyRoute => "write points parted by blanks: \"7030N06000W 78N040W CYFB\"",

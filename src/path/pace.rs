@@ -8,6 +8,9 @@ use super::leg::Leg;
 use crate::intake::{Flight, Mark, Pace};
 use crate::units::Place;
 
+/// A change of speed so near to a point of the route is taken as at it: a shorter leg would have no direction.
+const NEAR_M: f64 = 1e-3;
+
 /// A stretch flown at one speed.
 struct Piece {
     from: Place,
@@ -72,8 +75,9 @@ impl Walk {
     fn leg(&mut self, from: Place, to: Place) {
         let whole = Line::between(from, to);
         let (mut here, mut done_m) = (from, 0.0);
-        while let Some(ahead_m) = self.next_change_m().filter(|ahead_m| done_m + ahead_m < whole.length_m()) {
-            if ahead_m > 0.0 {
+        let last_m = whole.length_m() - NEAR_M;
+        while let Some(ahead_m) = self.next_change_m().filter(|ahead_m| done_m + ahead_m < last_m) {
+            if ahead_m > NEAR_M {
                 done_m += ahead_m;
                 let there = Place::from_normal(whole.normal(done_m));
                 self.go(here, there, Line::between(here, there));

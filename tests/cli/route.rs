@@ -31,8 +31,25 @@ fn fixes_that_are_no_text_are_refused_line_by_line_and_their_number_is_told() {
     let with = |file: &str| run_in(folder.path(), &[&ENDS[..], &["--route=OTHER", "--fixes", file]].concat());
     let ran = with("long.csv");
     assert_eq!(ran.code, Some(1));
-    assert_eq!(ran.err, "gloamline: long.csv:2:1: the line is not UTF-8 text of ordinary length\n");
+    assert_eq!(
+        ran.err,
+        "gloamline: long.csv:2:1: the line is not UTF-8 text of ordinary length\n  hint: save the file as UTF-8, not as UTF-16\n"
+    );
     let ran = with("wild.csv");
     assert!(ran.refused().contains("wild.csv: 80 more rows were refused\n"), "{}", ran.err);
     assert!(with("none.csv").refused().starts_with("gloamline: none.csv: cannot be read"));
+}
+
+#[test]
+fn a_ground_speed_stands_for_the_time_in_the_air() {
+    let ends = &ENDS[..4];
+    let said = run(&[ends, &["--ground-speed-kt=480", "--route=78N040W"]].concat()).done();
+    assert!(said.contains("Landing "), "{said}");
+    let ran = run(&[ends, &["--ground-speed-kt=-480"]].concat());
+    assert_eq!(
+        ran.refused(),
+        "gloamline: --ground-speed-kt: 'ground_speed_kt' of -480 is outside 10 to 1500\n"
+    );
+    let ran = run(&[&ENDS[..], &["--ground-speed-kt=300"]].concat());
+    assert!(ran.refused().contains("more than 1 % apart, so leave one of them out"), "{}", ran.err);
 }

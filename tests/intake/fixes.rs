@@ -107,6 +107,12 @@ fn a_first_row_that_is_bad_is_no_header() {
     );
 }
 
+#[test]
+fn a_name_that_is_neither_code_nor_fix_is_said_to_be() {
+    let error = flown("NOVEM,60,-20", "NOVEX").unwrap_err();
+    assert_eq!(error.to_string(), "f.toml:5:10: no aerodrome has the code NOVEX, and no fix that name");
+}
+
 proptest! {
     #[test]
     fn no_row_makes_the_reader_panic(lines in prop::collection::vec("[A-Z0-9,;\t\"é.\u{0}-]{0,20}", 0..6)) {

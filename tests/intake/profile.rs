@@ -6,6 +6,8 @@ use gloamline::light::{Direction, Limit};
 use gloamline::path::{FlightError, Path, fly};
 use gloamline::sky::{Sky, elevation};
 use gloamline::units::Metres;
+use proptest::prelude::*;
+use std::fmt::Write;
 
 const KNOT_M_S: f64 = 1852.0 / 3600.0;
 /// Sums of a few dozen legs in seconds.
@@ -246,4 +248,62 @@ fn a_flight_with_neither_landing_nor_speed_is_refused() {
     assert!(
         said(&format!("{ENDS}[[profile]]\nnm = 5\nlevel_ft = 1\n")).contains("says when the flight ends")
     );
+}
+
+#[test]
+fn a_speed_that_changes_at_a_point_of_the_route_makes_no_leg_of_nothing() {
+    let route = "route = \"70N030W 70N030W 78N090W\"\n";
+    let at_nm =
+        Metres(flown(&format!("ground_speed_kt = 450\n{route}")).legs()[0].length_m()).nautical_miles();
+    for off_nm in [-1e-3, -1e-8, -1e-12, 0.0, 1e-12, 1e-8, 1e-3] {
+        let nm = at_nm + off_nm;
+        let path = flown(&format!(
+            "ground_speed_kt = 450\n{route}[[profile]]\nnm = {nm}\nlevel_ft = 30000\nground_speed_kt = 480\n"
+        ));
+        let last = path.legs().last().unwrap().speed_m_s() / KNOT_M_S;
+        assert!((last - 480.0).abs() < 1e-6, "{off_nm}: {last}");
+        assert_eq!(path.legs().len(), if off_nm.abs() > 1e-4 { 4 } else { 3 }, "{off_nm}");
+    }
+}
+
+proptest! {
+    #![proptest_config(ProptestConfig::with_cases(60))]
+    #[test]
+    fn whatever_the_profile_the_legs_join_and_the_heights_too(
+        steps in prop::collection::vec((any::<bool>(), 1.0..400.0, 0.0..45_000.0, prop::option::of(300.0..600.0)), 1..8),
+        routed in any::<bool>(),
+    ) {
+        let mut text = format!("{ENDS}ground_speed_kt = 450\n");
+        text += if routed { "route = \"70N030W 90N000E 75N180W\"\n" } else { "" };
+        let (mut nm, mut minutes) = (0.0, 0);
+        for (timed, by, level, speed) in steps {
+            // a minute for each 7.5 NM: mostly one after the other, whichever way each is marked
+            let at = if timed { format!("at = \"{minutes}m\"") } else { format!("nm = {nm}") };
+            (nm, minutes) = (nm + by, minutes + (by / 7.5) as u32);
+            let speed: Option<f64> = speed;
+            let speed = speed.map_or(String::new(), |kt| format!("ground_speed_kt = {kt}\n"));
+            write!(text, "[[profile]]\n{at}\nlevel_ft = {level}\n{speed}").unwrap();
+        }
+        let path = flight_file(&text, "f.toml").map_err(|_| ()).and_then(|f| fly(&f).map_err(|_| ()));
+        // marks of both kinds may pass each other: those flights are refused
+        prop_assume!(path.is_ok());
+        let path = path.unwrap();
+            let legs = path.legs();
+            prop_assert_eq!(legs[0].begin_s, 0.0);
+            prop_assert_eq!(legs[legs.len() - 1].end_s, path.airborne_s);
+            for pair in legs.windows(2) {
+                prop_assert_eq!(pair[0].end_s, pair[1].begin_s);
+                let (a, b) = (pair[0].at(pair[0].end_s).normal, pair[1].at(pair[1].begin_s).normal);
+                // 1e-12 of the Earth's radius is 6 µm
+                prop_assert!((0..3).all(|i| (a[i] - b[i]).abs() < 1e-12), "{a:?} {b:?}");
+            }
+            for bend in path.heights.as_ref().unwrap().bends_s().filter(|s| (1e-3..path.airborne_s - 1e-3).contains(s)) {
+                let height = |at_s: f64| path.at(at_s).height.unwrap().0;
+                // the steepest is 45,000 ft in the shortest step that the draw makes, which may be a second
+                prop_assert!((height(bend + 1e-6) - height(bend - 1e-6)).abs() < 0.1);
+            }
+            let brief = gloamline::brief(flight_file(&text, "f.toml").unwrap(), &Sky::default()).unwrap();
+            let tiled: f64 = brief.deck.unwrap().deck.segments.iter().map(|s| s.end_s - s.begin_s).sum();
+            prop_assert!((tiled - path.airborne_s).abs() < 1e-6);
+    }
 }
