@@ -329,14 +329,10 @@ pub(super) fn escaped(given: &str, longest: usize) -> String {
 impl Problem {
     fn hint(&self) -> Option<String> {
         let text = match self {
-<<<<<<< HEAD
-            Self::UnknownAerodrome(unknown) => return unknown_place_hint(unknown),
-            Self::Track(problem) => return problem.hint(),
-=======
             Self::UnknownAerodrome(unknown) | Self::UnknownName(unknown) => {
                 return unknown_place_hint(unknown);
             }
->>>>>>> route
+            Self::Track(problem) => return problem.hint(),
             Self::Coordinates(_) => {
                 "write 7830N02000W, 78N020W, 78-30N 020-00W or 78.5,-20: two digits for degrees of latitude, three for longitude"
             }
