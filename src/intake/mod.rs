@@ -6,6 +6,7 @@
 mod flight;
 mod ahead;
 mod problem;
+mod near;
 mod place;
 mod fixes;
 mod gazetteer;
