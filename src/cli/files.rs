@@ -5,7 +5,7 @@ use std::path::{Path, PathBuf};
 use tempfile::NamedTempFile;
 
 /// No flight file and no recording is longer than this; a longer one is something else.
-const LONGEST_INPUT: u64 = 256 << 20;
+const LONGEST_INPUT: u64 = 64 << 20;
 
 /// A file that cannot be read or written.
 #[derive(Debug, thiserror::Error)]

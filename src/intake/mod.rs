@@ -7,6 +7,7 @@ mod brightness;
 mod flight;
 mod ahead;
 mod problem;
+mod near;
 mod place;
 mod fixes;
 mod gazetteer;

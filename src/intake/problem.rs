@@ -1,10 +1,8 @@
 //! What can be wrong with a flight as it was given, where it stands, and the cure.
 
-use super::ahead::{AIR_FIELDS, ALTERNATE_FIELDS, LOW_SUN_FIELDS};
 use super::brightness::BrightnessError;
 use super::draft::Origin;
-use super::file::{FIELDS, PLACE_FIELDS, POLAR_FIELDS, WAYPOINT_FIELDS};
-use super::pace::PROFILE_FIELDS;
+use super::near::near_field;
 use super::track::TrackProblem;
 use crate::places::UnknownAerodrome;
 use crate::units::{Dut1Error, PlaceError, YEARS};
@@ -369,34 +367,4 @@ fn unknown_place_hint(unknown: &UnknownAerodrome) -> Option<String> {
         return Some("coordinates begin with digits: 7830N02000W, 78N020W or 78.5,-20".to_string());
     }
     unknown.hint()
-}
-
-/// The known field that a misspelt one shares all letters or most letters' pairs with.
-fn near_field(field: &str) -> Option<String> {
-    let known = [
-        &FIELDS[..],
-        &WAYPOINT_FIELDS,
-        &PLACE_FIELDS,
-        &POLAR_FIELDS,
-        &LOW_SUN_FIELDS,
-        &AIR_FIELDS,
-        &ALTERNATE_FIELDS,
-        &PROFILE_FIELDS,
-    ]
-    .concat();
-    let lower = field.to_ascii_lowercase();
-    let letters = |word: &str| {
-        let mut bytes = word.as_bytes().to_vec();
-        bytes.sort_unstable();
-        bytes
-    };
-    let pairs = |word: &str| word.as_bytes().windows(2).map(<[u8]>::to_vec).collect::<Vec<_>>();
-    let given = pairs(&lower);
-    let shared = |word: &str| pairs(word).iter().filter(|pair| given.contains(pair)).count();
-    let exchanged = known.iter().find(|word| letters(word) == letters(&lower));
-    let alike = || {
-        let near = known.iter().filter(|word| shared(word) * 2 >= word.len() - 1);
-        near.max_by_key(|word| shared(word))
-    };
-    exchanged.or_else(alike).map(|best| format!("did you mean '{best}'?"))
 }

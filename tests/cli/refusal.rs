@@ -330,15 +330,18 @@ fn a_file_that_is_not_there_or_is_none_is_said_to_be_so() {
     assert!(ran.refused().starts_with("gloamline: flight.toml: cannot be read: "), "{}", ran.err);
     let ran = run_in(folder.path(), &["brief", "."]);
     assert!(ran.refused().starts_with("gloamline: .: cannot be read: "), "{}", ran.err);
-    let endless = vec![b'#'; 17 << 20];
+    let endless = vec![b'#'; 65 << 20];
     let ran = run_fed(&endless, &["brief", "-"]);
-    assert_eq!(ran.refused(), "gloamline: standard input: longer than 16 MB, which no flight file is\n");
+    assert_eq!(
+        ran.refused(),
+        "gloamline: standard input: longer than 64 MB, which no flight and no recording is\n"
+    );
 }
 
 #[test]
 fn missing_arguments_are_said_to_be_missing() {
     for (arguments, missing) in [
-        (&["brief"][..], "<FLIGHT.toml>"),
+        (&["brief"][..], "<FLIGHT>"),
         (&["brief", "--from", "CYYZ"], "--to <PLACE>"),
         (&["brief", "--to", "CYYZ"], "--from <PLACE>"),
         (&["sun"], "<TIME>"),
