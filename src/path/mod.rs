@@ -8,6 +8,7 @@ mod height;
 mod fly;
 mod circle;
 mod extent;
+mod track;
 
 pub use circle::{Circle, CircleCrossing, CircleName, Heading, circles};
 pub use extent::Passed;
@@ -15,3 +16,4 @@ pub use fly::{FlightError, Path, Position, fly};
 pub use geodesic::{Frame, Line, LinePoint};
 pub use height::Heights;
 pub use leg::Leg;
+pub use track::TrackPoint;
