@@ -19,6 +19,8 @@ const PROBED_SHARE: f64 = 0.75;
 const ONE_INSTANT_S: f64 = 1e-6;
 /// Nearer to a pole or to 180° than this, in degrees, is on it: 0.1 mm.
 const ON_IT_DEG: f64 = 1e-9;
+/// Points nearer to each other than this, in degrees, are one.
+const SAME_DEG: f64 = 1e-6;
 
 /// A point of a track.
 ///
@@ -75,15 +77,21 @@ impl Path {
 }
 
 /// Goes on with the last line where the next one begins at its end, else begins another.
-fn append(lines: &mut Vec<Vec<TrackPoint>>, mut points: Vec<TrackPoint>) {
-    let joins = |a: &TrackPoint, b: &TrackPoint| {
-        (a.lat_deg - b.lat_deg).abs() < 1e-6 && (a.lon_deg - b.lon_deg).abs() < 1e-6
+fn append(lines: &mut Vec<Vec<TrackPoint>>, points: Vec<TrackPoint>) {
+    let Some((line, end)) = lines.last_mut().and_then(|line| line.last().copied().map(|end| (line, end)))
+    else {
+        lines.push(points);
+        return;
     };
-    match lines.last_mut() {
-        Some(line) if line.last().is_some_and(|end| joins(end, &points[0])) => {
-            line.extend(points.drain(1..));
-        }
-        _ => lines.push(points),
+    let begin = points[0];
+    let (lat_off, lon_off) = ((end.lat_deg - begin.lat_deg).abs(), (end.lon_deg - begin.lon_deg).abs());
+    if lat_off < SAME_DEG && lon_off < SAME_DEG {
+        line.extend(&points[1..]);
+    } else if end.lat_deg.abs() < 90.0 && lon_off < 1.0 && lat_off < SAME_DEG {
+        // a hand's breadth from a pole nanometres show in the longitude
+        line.extend(&points);
+    } else {
+        lines.push(points);
     }
 }
 
@@ -124,9 +132,13 @@ fn lon_between(leg: &Leg, begin_s: f64, end_s: f64, last: Option<TrackPoint>) ->
     }
 }
 
-/// Latitude and longitude in degrees.
+/// Latitude and longitude in degrees; a leg's ends are the places that were given.
 fn raw(leg: &Leg, at_s: f64) -> (f64, f64) {
-    let place = Place::from_normal(leg.normal(at_s));
+    let place = match at_s {
+        s if s == leg.begin_s => leg.from,
+        s if s == leg.end_s => leg.to,
+        s => Place::from_normal(leg.normal(s)),
+    };
     (place.lat.deg(), place.lon.deg())
 }
 
