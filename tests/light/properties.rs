@@ -67,7 +67,7 @@ fn timed(first: Place, steps: &[Step]) -> Vec<(Place, f64)> {
 }
 
 /// Two points or more, one step in ten a holding.
-pub(super) fn any_flight() -> impl Strategy<Value = Flight> {
+pub(crate) fn any_flight() -> impl Strategy<Value = Flight> {
     let steps = prop_oneof![prop::collection::vec(step(), 1), prop::collection::vec(step(), 2..8)];
     (takeoff(), place(), steps)
         .prop_map(|(takeoff, first, steps)| (takeoff, timed(first, &steps)))
