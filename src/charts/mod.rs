@@ -7,5 +7,6 @@ pub mod labels;
 mod timeline;
 mod year;
 
+pub(crate) use timeline::style::state_ink;
 pub use timeline::timeline;
 pub use year::year;

@@ -233,6 +233,8 @@ fn write_one(folder: &Path, stem: &str, brief: &Brief) -> Result<(), Refusal> {
         &format!("{stem}.csv"),
         reports::csv(std::slice::from_ref(brief)).map_err(|e| said(&e))?.as_bytes(),
     )?;
+    batch.add(&format!("{stem}.geojson"), reports::geojson(brief).map_err(|e| said(&e))?.as_bytes())?;
+    batch.add(&format!("{stem}.kml"), reports::kml(brief).as_bytes())?;
     let picture = charts::timeline(brief).map_err(|e| said(&e))?;
     batch.add(&format!("{stem}.svg"), picture.to_svg().as_bytes())?;
     batch.add(&format!("{stem}.png"), &picture.to_png(1.0).map_err(|e| said(&e))?)?;

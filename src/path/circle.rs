@@ -138,7 +138,7 @@ fn latitude_crossings(leg: &Leg, circle: Circle, latitude: Angle, found: &mut Ve
 
 /// A leg's crossing of the 180° meridian: on a geodesic that is no meridian the longitude is monotone, by half a turn
 /// at most.
-fn meridian_crossing(leg: &Leg) -> Option<CircleCrossing> {
+pub(super) fn meridian_crossing(leg: &Leg) -> Option<CircleCrossing> {
     let line = leg.line();
     if line.is_meridional() || leg.length_m() == 0.0 {
         return None;

@@ -11,6 +11,7 @@ mod profile;
 mod fly;
 mod circle;
 mod extent;
+mod track;
 
 pub use circle::{Circle, CircleCrossing, CircleName, Heading, circles};
 pub use error::FlightError;
@@ -19,3 +20,4 @@ pub use fly::{Path, Position, fly};
 pub use geodesic::{Frame, Line, LinePoint};
 pub use height::Heights;
 pub use leg::Leg;
+pub use track::TrackPoint;

@@ -3,6 +3,8 @@
 use super::{FLIGHT, folder, names, run_in};
 use std::path::Path;
 
+const KML: &str = "http://www.opengis.net/kml/2.2";
+
 const HOSTILE: [&str; 14] = [
     "../../../etc/passwd",
     "..\\..\\windows\\system32",
@@ -66,6 +68,7 @@ fn a_hostile_name_stays_in_its_folder_and_is_mere_words() {
         assert_eq!(json["flight"]["name"], name);
         assert_csv_is_inert(&read(&out, ".csv"), name);
         assert_svg_is_inert(&read(&out, ".svg"), name);
+        assert_maps_are_inert(&out, name);
     }
 }
 
@@ -78,6 +81,16 @@ fn assert_svg_is_inert(text: &str, name: &str) {
         assert!(links.into_iter().all(|own| own.value().starts_with('#')), "{name:?}");
         assert!(node.attributes().all(|own| !own.name().starts_with("on")), "{name:?}");
     }
+}
+
+fn assert_maps_are_inert(out: &Path, name: &str) {
+    let (geojson, kml) = (read(out, ".geojson"), read(out, ".kml"));
+    assert!(!geojson.contains(is_hidden) && !kml.contains(is_hidden), "{name:?}");
+    let map: serde_json::Value = serde_json::from_str(&geojson).unwrap();
+    assert_eq!(map["features"].as_array().unwrap().len() + 1, geojson.lines().count() - 1, "{name:?}");
+    let document = roxmltree::Document::parse(&kml).unwrap_or_else(|error| panic!("{name:?}: {error}"));
+    let said = document.descendants().find(|node| node.has_tag_name((KML, "name"))).unwrap();
+    assert_eq!(said.text(), map["flight"]["name"].as_str(), "{name:?}");
 }
 
 fn assert_csv_is_inert(text: &str, name: &str) {

@@ -15,7 +15,7 @@ fn a_file_in_the_way_of_the_folder_is_named() {
 
 #[test]
 fn a_flight_whose_files_cannot_all_be_named_leaves_none() {
-    for ending in ["txt", "json", "csv"] {
+    for ending in ["txt", "json", "csv", "geojson", "kml"] {
         let folder = folder(&[("a.toml", FLIGHT)]);
         let blocked = format!("varde-71.{ending}");
         std::fs::create_dir_all(folder.path().join("out").join(&blocked)).unwrap();
@@ -35,7 +35,16 @@ fn one_flight_that_cannot_be_written_does_not_keep_the_others_back() {
     let found = names(&folder.path().join("out"));
     assert_eq!(
         found,
-        ["other.csv", "varde-71.csv", "varde-71.json", "varde-71.png", "varde-71.svg", "varde-71.txt"]
+        [
+            "other.csv",
+            "varde-71.csv",
+            "varde-71.geojson",
+            "varde-71.json",
+            "varde-71.kml",
+            "varde-71.png",
+            "varde-71.svg",
+            "varde-71.txt"
+        ]
     );
 }
 
@@ -49,7 +58,7 @@ fn files_of_an_earlier_run_are_replaced() {
     std::fs::write(&text, "old").unwrap();
     brief();
     assert_eq!(std::fs::read(&text).unwrap(), first);
-    assert_eq!(names(&folder.path().join("out")).len(), 5);
+    assert_eq!(names(&folder.path().join("out")).len(), 7);
 }
 
 #[cfg(target_os = "linux")]

@@ -12,6 +12,7 @@ mod trust;
 use crate::tables::{Row, instant, number, rows};
 use gloamline::intake::{Flight, Pace, RoutePoint, Stop};
 use gloamline::units::Place;
+pub(crate) use properties::any_flight;
 
 /// A flight through timed points, from take-off to landing.
 pub(crate) fn flight(name: &str, takeoff: gloamline::units::Instant, points: &[(Place, f64)]) -> Flight {

@@ -4,3 +4,6 @@ mod clocks;
 mod fresh;
 mod readme;
 mod json;
+mod geo;
+mod geo_rules;
+mod kml;

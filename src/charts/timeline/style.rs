@@ -20,16 +20,27 @@ pub(in crate::charts) const PLATE: Ink = Ink::WHITE.with_alpha(0.88);
 pub(in crate::charts) const SMALL: f64 = 14.0;
 pub(in crate::charts) const TEXT: f64 = 15.0;
 
+/// The ink that stands for a state, in pictures and on maps.
+pub(crate) fn state_ink(state: State) -> Ink {
+    Ink::hex(match state {
+        State::Daylight => 0xfff8e1,
+        State::CivilTwilight => 0xf5dcb8,
+        State::NauticalTwilight => 0xd5c6cf,
+        State::AstronomicalTwilight => 0xadb0cb,
+        State::Darkness => 0x7a84a6,
+    })
+}
+
 /// How a state's band and its part of the strip are filled.
 pub(in crate::charts) fn look(state: State) -> Look {
-    let (fill, texture) = match state {
-        State::Daylight => (0xfff8e1, None),
-        State::CivilTwilight => (0xf5dcb8, Some((Texture::Dots, 0xd3ae7c, 14.0))),
-        State::NauticalTwilight => (0xd5c6cf, Some((Texture::Rising, 0xb9a5b5, 16.0))),
-        State::AstronomicalTwilight => (0xadb0cb, Some((Texture::Falling, 0x9296b8, 16.0))),
-        State::Darkness => (0x7a84a6, Some((Texture::Crossed, 0x6c7699, 18.0))),
+    let texture = match state {
+        State::Daylight => None,
+        State::CivilTwilight => Some((Texture::Dots, 0xd3ae7c, 14.0)),
+        State::NauticalTwilight => Some((Texture::Rising, 0xb9a5b5, 16.0)),
+        State::AstronomicalTwilight => Some((Texture::Falling, 0x9296b8, 16.0)),
+        State::Darkness => Some((Texture::Crossed, 0x6c7699, 18.0)),
     };
-    let look = Look::filled(Ink::hex(fill));
+    let look = Look::filled(state_ink(state));
     texture.map_or(look, |(texture, ink, spacing)| {
         look.hatched(Hatch { spacing, ..Hatch::new(texture, Ink::hex(ink)) })
     })

@@ -105,7 +105,7 @@ fn instant(brief: &Brief, at_s: f64) -> Instant {
 }
 
 /// RFC 3339 of a time in seconds from take-off.
-fn when(brief: &Brief, at_s: f64) -> String {
+pub(super) fn when(brief: &Brief, at_s: f64) -> String {
     machine(instant(brief, at_s))
 }
 
