@@ -117,7 +117,7 @@ fn head(brief: &Brief, bounds: &Bounds) -> Head {
             from: one_line(&flight.from.label),
             to: one_line(&flight.to.label),
             takeoff_utc: machine(flight.takeoff),
-            landing_utc: machine(flight.landing),
+            landing_utc: machine(brief.path.landing()),
         },
         heights: brief.path.heights.as_ref().map(|_| "metres above mean sea level, not above the ellipsoid"),
         cautions: super::caution::cautions(brief),
