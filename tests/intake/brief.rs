@@ -110,3 +110,24 @@ fn a_real_recordings_crossings_are_those_of_an_independent_script() {
         assert!(gap.abs() < tolerance, "{row:?}: {gap} s");
     }
 }
+
+#[test]
+fn our_own_geojson_read_back_is_the_same_flight() {
+    for name in ["varde-611", "varde-18", "varde-180", "varde-90"] {
+        let root = concat!(env!("CARGO_MANIFEST_DIR"), "/reports/");
+        let text = std::fs::read_to_string(format!("{root}{name}.geojson")).unwrap();
+        let mut read = tracks(text.as_bytes(), "flight.geojson", &TrackOptions::default()).unwrap();
+        assert_eq!((read.tracks.len(), read.refused.len()), (1, 0), "{name}");
+        let back = brief(read.tracks.remove(0).flight(name), &Sky::default()).unwrap();
+        let json = std::fs::read_to_string(format!("{root}{name}.json")).unwrap();
+        let json: serde_json::Value = serde_json::from_str(&json).unwrap();
+        let wanted = json["beneath"]["crossings"].as_array().unwrap();
+        assert_eq!(back.light.crossings.len(), wanted.len(), "{name}");
+        for (found, wanted) in back.light.crossings.iter().zip(wanted) {
+            let utc: chrono::DateTime<chrono::Utc> = wanted["utc"].as_str().unwrap().parse().unwrap();
+            let gap = back.path.takeoff.after_s(found.at_s).since_s(Instant::from_utc(utc));
+            // the document's lines keep within 100 m, which a slow Sun takes seconds for
+            assert!(gap.abs() < 3.0, "{name}: {gap} s at {utc}");
+        }
+    }
+}

@@ -20,11 +20,32 @@ pub(super) fn read(text: &str, options: &TrackOptions) -> Found<Vec<RawTrack>> {
     finder.feature_or_collection(&mut cursor)?;
     cursor.end()?;
     let lines = finder.lines;
-    let tracks = finder.gathering.done();
+    let tracks = joined(finder.gathering.done());
     if tracks.is_empty() {
         return Err((None, if lines { TrackProblem::NoTimes } else { TrackProblem::Nothing }));
     }
     Ok(tracks)
+}
+
+/// Lines that each begin where and when the one before ended are one flight: so are the features of our own documents, one
+/// for each state of the light.
+fn joined(tracks: Vec<RawTrack>) -> Vec<RawTrack> {
+    let mut whole: Vec<RawTrack> = Vec::with_capacity(1);
+    for track in tracks {
+        match whole.last_mut() {
+            Some(last) if goes_on(last, &track) => last.points.extend(track.points.into_iter().skip(1)),
+            _ => whole.push(track),
+        }
+    }
+    whole
+}
+
+fn goes_on(last: &RawTrack, next: &RawTrack) -> bool {
+    let (Some(end), Some(begin)) = (last.points.last(), next.points.first()) else { return false };
+    let (a, b) = (end.place.normal(), begin.place.normal());
+    // a hand's breadth and a millisecond: what documents round to
+    let apart = (0..3).map(|i| (a[i] - b[i]).powi(2)).sum::<f64>().sqrt();
+    last.name == next.name && begin.instant.since_s(end.instant).abs() < 2e-3 && apart < 5e-8
 }
 
 /// What a feature holds, in whichever order it comes.
