@@ -40,9 +40,6 @@ pub(super) struct BriefRequest {
     #[arg(value_name = "FLIGHT", required_unless_present = "from")]
     pub(super) files: Vec<PathBuf>,
 
-    #[command(flatten)]
-    pub(super) inline: InlineRequest,
-
     /// Your own points (CSV: name, lat, lon), for names in flights that are neither codes nor coordinates
     #[arg(long, value_name = "FIXES.csv")]
     pub(super) fixes: Option<PathBuf>,
@@ -51,7 +48,7 @@ pub(super) struct BriefRequest {
     #[arg(long = "as", value_enum, default_value_t = Form::Text, value_name = "FORM")]
     pub(super) form: Form,
 
-    /// Write NAME.txt, .json, .csv, .png and .svg for each flight into this folder
+    /// Write NAME.txt, .json, .csv, .png, .svg, .geojson and .kml for each flight into this folder
     #[arg(long, value_name = "DIR")]
     pub(super) out: Option<PathBuf>,
 
@@ -82,6 +79,9 @@ pub(super) struct BriefRequest {
     /// Levels of brightness in lux to count the time above, for flight files that give none [default: 1,10,100,1000,10000]
     #[arg(long, value_name = "LUX,...", value_delimiter = ',', allow_hyphen_values = true)]
     pub(super) lux_levels: Option<Vec<f64>>,
+
+    #[command(flatten)]
+    pub(super) inline: InlineRequest,
 }
 
 #[derive(Debug, Args)]

@@ -49,9 +49,12 @@ fn stop_name(stop: &Stop) -> String {
 
 /// The aerodromes' names on a line of their own, where they have any.
 fn long_names(flight: &Flight) -> String {
-    let names: Vec<&str> =
-        [&flight.from, &flight.to].iter().filter_map(|stop| stop.name.as_deref()).collect();
-    if names.is_empty() { String::new() } else { format!("{}\n", names.join(" to ")) }
+    match (&flight.from.name, &flight.to.name) {
+        (Some(from), Some(to)) => format!("{from} to {to}\n"),
+        (Some(from), None) => format!("from {from}\n"),
+        (None, Some(to)) => format!("to {to}\n"),
+        (None, None) => String::new(),
+    }
 }
 
 /// The local clocks that times are given on besides UTC: each end's, once.
