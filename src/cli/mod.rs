@@ -23,6 +23,19 @@ enum Outcome {
     Failed,
 }
 
+impl Outcome {
+    /// The outcome of a command that does one thing: a refusal is said, with its cure where one is known.
+    fn of<R: std::fmt::Display>(told: Result<(), R>, hint: impl Fn(&R) -> Option<String>) -> Self {
+        match told {
+            Ok(()) => Self::Done,
+            Err(refusal) => {
+                terminal::complain(&refusal, hint(&refusal).as_deref());
+                Self::Failed
+            }
+        }
+    }
+}
+
 /// Runs what the arguments ask for.
 pub(crate) fn run() -> ExitCode {
     let arguments = match Arguments::try_parse() {

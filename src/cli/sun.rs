@@ -23,14 +23,10 @@ enum Refusal {
 }
 
 pub(super) fn run(request: &SunRequest) -> Outcome {
-    match told(request) {
-        Ok(()) => Outcome::Done,
-        Err(refusal) => {
-            let hint = if let Refusal::Intake(error) = &refusal { error.hint() } else { None };
-            terminal::complain(&refusal, hint.as_deref());
-            Outcome::Failed
-        }
-    }
+    Outcome::of(told(request), |refusal| match refusal {
+        Refusal::Intake(error) => error.hint(),
+        _ => None,
+    })
 }
 
 fn told(request: &SunRequest) -> Result<(), Refusal> {

@@ -1,11 +1,10 @@
 //! The four limits, the five states between them, and the names of the eight events.
 
+use crate::sky::HORIZONTAL_REFRACTION;
 use crate::units::Angle;
 use std::sync::LazyLock;
 
-/// Refraction at the horizon by the almanacs' convention (Nautical Almanac, explanation).
-const HORIZONTAL_REFRACTION: Angle = Angle::from_arcmin(34.0);
-/// The Sun's semidiameter by the same convention.
+/// The Sun's semidiameter by the almanacs' convention, as [`HORIZONTAL_REFRACTION`] is.
 const MEAN_SEMIDIAMETER: Angle = Angle::from_arcmin(16.0);
 
 /// A geometric elevation of the Sun's centre at which the state changes.

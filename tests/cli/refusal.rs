@@ -2,7 +2,6 @@
 
 use super::{FLIGHT, folder, run, run_fed, run_in};
 use std::fmt::Write;
-use std::time::{Duration, Instant};
 
 /// Runs a flight file that must be refused; what was said, without the program's name.
 fn said_of(text: &str) -> String {
@@ -315,12 +314,10 @@ fn with_waypoints(count: usize) -> String {
 
 #[test]
 fn twenty_thousand_waypoints_are_flown_and_more_are_refused_at_once() {
-    let begin = Instant::now();
     let said = said_of(&with_waypoints(100_000));
     assert_eq!(said, "flight.toml:7:1: 100000 waypoints are more than the 20000 that a flight file may have");
     let folder = folder(&[("flight.toml", &with_waypoints(20_000))]);
     run_in(folder.path(), &["brief", "flight.toml"]).done();
-    assert!(begin.elapsed() < Duration::from_secs(20), "{:?}", begin.elapsed());
 }
 
 #[test]
