@@ -74,6 +74,12 @@ impl Heights {
         self.points.iter().map(|p| p.0)
     }
 
+    /// The same strictly between two times, found without looking at the rest: a recording has tens of thousands.
+    pub(super) fn bends_within_s(&self, begin_s: f64, end_s: f64) -> impl Iterator<Item = f64> {
+        let from = self.points.partition_point(|p| p.0 <= begin_s);
+        self.points[from..].iter().map(|p| p.0).take_while(move |&at_s| at_s < end_s)
+    }
+
     /// Seconds from take-off at which a height is passed.
     pub fn passes_s(&self, height: Metres) -> impl Iterator<Item = f64> {
         self.points.windows(2).filter_map(move |pair| {

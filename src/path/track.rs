@@ -104,7 +104,7 @@ fn pieces<'a>(
 ) -> Vec<Piece<'a>> {
     let flips_s = meridian_crossing(leg).map(|crossing| crossing.at_s);
     let turns = leg.line().vertices().map(|d| leg.time_s(d));
-    let bends = heights.into_iter().flat_map(Heights::bends_s);
+    let bends = heights.into_iter().flat_map(|heights| heights.bends_within_s(begin_s, end_s));
     let inside = |t: &f64| *t > begin_s + ONE_INSTANT_S && *t < end_s - ONE_INSTANT_S;
     let mut times: Vec<f64> = turns.chain(bends).chain(flips_s).filter(inside).collect();
     times.extend([begin_s, end_s]);
